@@ -1,0 +1,8 @@
+import type { Deps } from './deps';
+import type { AnyRoute } from './http/route';
+import { sessionRoutes } from './session/session-routes';
+
+/** Every feature's routes; the router and the OpenAPI document are made from this list. */
+export function allRoutes(deps: Deps): readonly AnyRoute[] {
+  return [...sessionRoutes(deps)];
+}
