@@ -1,0 +1,37 @@
+import { fork } from 'node:child_process';
+import { buildAll } from './build';
+import { demoEnvironment, isDemo, readEnvironment, type Environment } from './environment';
+import { startFakes, type Fakes } from './fakes';
+import { seed } from './seed';
+
+/** `npm start`: builds, starts the fakes in the demo, migrates, seeds the demo once, serves until it is told to stop. */
+async function main(): Promise<void> {
+  let env: Environment = readEnvironment();
+  await buildAll();
+  let fakes: Fakes | null = null;
+  if (isDemo(env)) {
+    env = demoEnvironment(env);
+    const port = Number(env['PORT']);
+    fakes = await startFakes(env, port === 0 ? 0 : port + 1);
+    env = { ...env, FORECAST_URL: fakes.forecastUrl, SMTP_URL: fakes.smtpUrl, DEMO_MAILBOX_URL: fakes.mailboxUrl };
+    if (await seed(env)) say('The demo circle has been seeded.');
+  }
+  const server = fork('dist/api/server.mjs', { env, stdio: 'inherit' });
+  const stop = () => server.kill('SIGTERM');
+  process.on('SIGINT', stop);
+  process.on('SIGTERM', stop);
+  server.on('exit', (code) => {
+    fakes?.stop();
+    process.exit(code ?? 1);
+  });
+  if (fakes) {
+    say(`Open ${env['PUBLIC_URL']}/demo for the demo accounts.`);
+    say(`The demo mailbox is at ${fakes.mailboxUrl}`);
+  }
+}
+
+function say(text: string): void {
+  process.stdout.write(`${text}\n`);
+}
+
+await main();
