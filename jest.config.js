@@ -1,9 +1,15 @@
 /** Two projects: `node` (shared, api, test/api, test/outside, test/migrations) and `web` (Angular units in jsdom). */
 const swc = [
   '@swc/jest',
-  { jsc: { target: 'es2022', parser: { syntax: 'typescript' }, baseUrl: __dirname, paths: {} }, module: { type: 'commonjs' } },
+  {
+    jsc: { target: 'es2022', parser: { syntax: 'typescript' }, baseUrl: __dirname, paths: {} },
+    module: { type: 'commonjs' },
+  },
 ];
-const moduleNameMapper = { '^@shared/(.*)$': '<rootDir>/shared/src/$1', '^@api/(.*)$': '<rootDir>/api/src/$1' };
+const moduleNameMapper = {
+  '^@shared/(.*)$': '<rootDir>/shared/src/$1',
+  '^@api/(.*)$': '<rootDir>/api/src/$1',
+};
 
 module.exports = {
   projects: [
@@ -12,7 +18,10 @@ module.exports = {
       testEnvironment: 'node',
       rootDir: __dirname,
       roots: ['<rootDir>/shared', '<rootDir>/api', '<rootDir>/test'],
-      testMatch: ['<rootDir>/{shared,api}/src/**/*.spec.ts', '<rootDir>/test/{api,outside,migrations,tools}/**/*.test.ts'],
+      testMatch: [
+        '<rootDir>/{shared,api}/src/**/*.spec.ts',
+        '<rootDir>/test/{api,outside,migrations,tools}/**/*.test.ts',
+      ],
       transform: { '^.+\\.ts$': swc },
       moduleNameMapper,
     },
@@ -24,7 +33,10 @@ module.exports = {
       testMatch: ['<rootDir>/web/src/**/*.spec.ts'],
       setupFilesAfterEnv: ['<rootDir>/web/setup-jest.ts'],
       transform: {
-        '^.+\\.(ts|js|mjs|html|svg)$': ['jest-preset-angular', { tsconfig: '<rootDir>/web/tsconfig.spec.json', stringifyContentPathRegex: '\\.(html|svg)$' }],
+        '^.+\\.(ts|js|mjs|html|svg)$': [
+          'jest-preset-angular',
+          { tsconfig: '<rootDir>/web/tsconfig.spec.json', stringifyContentPathRegex: '\\.(html|svg)$' },
+        ],
       },
       transformIgnorePatterns: ['node_modules/(?!.*\\.mjs$)'],
       moduleNameMapper,

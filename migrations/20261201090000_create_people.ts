@@ -45,5 +45,6 @@ export async function up(knex: Knex): Promise<void> {
 }
 
 export async function down(knex: Knex): Promise<void> {
-  for (const table of ['driving_days', 'days_away', 'person_roles', 'people']) await knex.schema.dropTable(table);
+  for (const table of ['driving_days', 'days_away', 'person_roles', 'people'])
+    await knex.schema.dropTable(table);
 }

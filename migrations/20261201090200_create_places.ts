@@ -79,6 +79,14 @@ export async function up(knex: Knex): Promise<void> {
 }
 
 export async function down(knex: Knex): Promise<void> {
-  for (const table of ['coordinator_profiles', 'breeder_profiles', 'boxes', 'species', 'counters', 'carriers', 'hubs'])
+  for (const table of [
+    'coordinator_profiles',
+    'breeder_profiles',
+    'boxes',
+    'species',
+    'counters',
+    'carriers',
+    'hubs',
+  ])
     await knex.schema.dropTable(table);
 }

@@ -1,6 +1,17 @@
 import type { Knex } from 'knex';
 
-const states = ['draft', 'seeking', 'booked', 'packed', 'aboard', 'handed-over', 'arrived', 'closed', 'on-hold', 'cancelled'];
+const states = [
+  'draft',
+  'seeking',
+  'booked',
+  'packed',
+  'aboard',
+  'handed-over',
+  'arrived',
+  'closed',
+  'on-hold',
+  'cancelled',
+];
 
 /** Parcels, their contents, the buyer's mornings, and each verdict a booking was made on. */
 export async function up(knex: Knex): Promise<void> {
@@ -71,5 +82,6 @@ export async function up(knex: Knex): Promise<void> {
 }
 
 export async function down(knex: Knex): Promise<void> {
-  for (const table of ['booking_verdicts', 'parcel_mornings', 'parcel_contents', 'parcels']) await knex.schema.dropTable(table);
+  for (const table of ['booking_verdicts', 'parcel_mornings', 'parcel_contents', 'parcels'])
+    await knex.schema.dropTable(table);
 }

@@ -4,7 +4,10 @@ import type { Knex } from 'knex';
 export async function up(knex: Knex): Promise<void> {
   await knex.schema.createTable('runs', (t) => {
     t.increments('id');
-    t.text('state').notNullable().checkIn(['proposed', 'confirmed', 'underway', 'handed-over', 'closed', 'called-off']).index();
+    t.text('state')
+      .notNullable()
+      .checkIn(['proposed', 'confirmed', 'underway', 'handed-over', 'closed', 'called-off'])
+      .index();
     t.text('date').notNullable().index();
     t.integer('coordinator_id').notNullable().references('people.id').index();
     t.integer('counter_id').notNullable().references('counters.id');

@@ -59,5 +59,6 @@ export async function up(knex: Knex): Promise<void> {
 }
 
 export async function down(knex: Knex): Promise<void> {
-  for (const table of ['history', 'calendar_feeds', 'invitations', 'outbox']) await knex.schema.dropTable(table);
+  for (const table of ['history', 'calendar_feeds', 'invitations', 'outbox'])
+    await knex.schema.dropTable(table);
 }

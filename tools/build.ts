@@ -2,7 +2,6 @@ import { spawn } from 'node:child_process';
 import { existsSync, readdirSync, statSync } from 'node:fs';
 import { join, resolve } from 'node:path';
 import { build as bundle } from 'esbuild';
-import { pathToFileURL } from 'node:url';
 
 /** Node entry points and where their bundles go. A worker thread is an entry of its own. */
 const entries = {
@@ -32,9 +31,14 @@ export async function buildServer(): Promise<void> {
 /** Builds the Angular pages, unless dist/ is newer than everything they are made of. */
 export async function buildWeb(): Promise<void> {
   const built = 'dist/web/browser/index.html';
-  const newest = Math.max(...['web', 'shared/src', 'angular.json', 'package-lock.json', 'tsconfig.json'].map(newestMs));
+  const newest = Math.max(
+    ...['web', 'shared/src', 'angular.json', 'package-lock.json', 'tsconfig.json'].map(newestMs),
+  );
   if (existsSync(built) && statSync(built).mtimeMs > newest) return;
-  await run(process.execPath, ['node_modules/@angular/cli/bin/ng.js', 'build'], { ...process.env, NG_CLI_ANALYTICS: 'false' });
+  await run(process.execPath, ['node_modules/@angular/cli/bin/ng.js', 'build'], {
+    ...process.env,
+    NG_CLI_ANALYTICS: 'false',
+  });
 }
 
 function newestMs(path: string): number {
@@ -49,12 +53,12 @@ export function run(command: string, args: readonly string[], env = process.env)
   return new Promise((done, fail) => {
     const child = spawn(command, args, { stdio: 'inherit', env });
     child.on('error', fail);
-    child.on('exit', (code) => (code === 0 ? done() : fail(new Error(`${[command, ...args].join(' ')} ended with ${code}`))));
+    child.on('exit', (code) =>
+      code === 0 ? done() : fail(new Error(`${[command, ...args].join(' ')} ended with ${code}`)),
+    );
   });
 }
 
 export async function buildAll(): Promise<void> {
   await Promise.all([buildServer(), buildWeb()]);
 }
-
-if (import.meta.url === pathToFileURL(process.argv[1] ?? '').href) await buildAll();

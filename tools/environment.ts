@@ -7,12 +7,17 @@ export type Environment = Record<string, string>;
 /** The process's environment with `.env` beneath it: what is set outside wins. */
 export function readEnvironment(): Environment {
   if (existsSync('.env')) process.loadEnvFile('.env');
-  return Object.fromEntries(Object.entries(process.env).filter((entry): entry is [string, string] => entry[1] !== undefined));
+  return Object.fromEntries(
+    Object.entries(process.env).filter((entry): entry is [string, string] => entry[1] !== undefined),
+  );
 }
 
 /** The demo is what starts when nobody has configured a real circle. */
 export function isDemo(env: Environment): boolean {
-  return env['DEMO'] === '1' || (env['DEMO'] === undefined && env['SMTP_URL'] === undefined && env['FORECAST_URL'] === undefined);
+  return (
+    env['DEMO'] === '1' ||
+    (env['DEMO'] === undefined && env['SMTP_URL'] === undefined && env['FORECAST_URL'] === undefined)
+  );
 }
 
 /** Fills in what the demo needs beside the addresses of its fakes; a secret is made once and kept beside the database. */

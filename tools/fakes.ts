@@ -11,8 +11,16 @@ export interface Fakes {
 /** Starts the forecast and mail stand-ins as processes of their own, on `firstPort` and the two after it (0: free ones). */
 export async function startFakes(env: Environment, firstPort: number): Promise<Fakes> {
   const port = (offset: number) => String(firstPort === 0 ? 0 : firstPort + offset);
-  const forecast = start('dist/fakes/forecast.mjs', { ...env, FORECAST_FAKE_PORT: port(0), FORECAST_FAKE_SEED: env['FORECAST_FAKE_SEED'] ?? '1' });
-  const mail = start('dist/fakes/mail.mjs', { ...env, MAIL_FAKE_SMTP_PORT: port(1), MAIL_FAKE_HTTP_PORT: port(2) });
+  const forecast = start('dist/fakes/forecast.mjs', {
+    ...env,
+    FORECAST_FAKE_PORT: port(0),
+    FORECAST_FAKE_SEED: env['FORECAST_FAKE_SEED'] ?? '1',
+  });
+  const mail = start('dist/fakes/mail.mjs', {
+    ...env,
+    MAIL_FAKE_SMTP_PORT: port(1),
+    MAIL_FAKE_HTTP_PORT: port(2),
+  });
   const stop = () => [forecast, mail].forEach(({ child }) => child.kill('SIGTERM'));
   try {
     const [forecastLine, mailLine] = await Promise.all([forecast.firstLine, mail.firstLine]);

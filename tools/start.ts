@@ -13,7 +13,12 @@ async function main(): Promise<void> {
     env = demoEnvironment(env);
     const port = Number(env['PORT']);
     fakes = await startFakes(env, port === 0 ? 0 : port + 1);
-    env = { ...env, FORECAST_URL: fakes.forecastUrl, SMTP_URL: fakes.smtpUrl, DEMO_MAILBOX_URL: fakes.mailboxUrl };
+    env = {
+      ...env,
+      FORECAST_URL: fakes.forecastUrl,
+      SMTP_URL: fakes.smtpUrl,
+      DEMO_MAILBOX_URL: fakes.mailboxUrl,
+    };
     if (await seed(env)) say('The demo circle has been seeded.');
   }
   const server = fork('dist/api/server.mjs', { env, stdio: 'inherit' });
@@ -34,4 +39,7 @@ function say(text: string): void {
   process.stdout.write(`${text}\n`);
 }
 
-await main();
+main().catch((error: unknown) => {
+  process.stderr.write(`${error instanceof Error ? error.message : String(error)}\n`);
+  process.exit(1);
+});

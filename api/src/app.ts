@@ -29,7 +29,13 @@ export function createApp(deps: Deps, options: AppOptions = {}): Express {
   app.set('query parser', 'simple');
   app.use(nonce, securityHeaders(config.PUBLIC_URL.startsWith('https:')));
   if (config.LOG_LEVEL !== 'silent')
-    app.use(pinoHttp({ logger: log, redact: ['req.headers.cookie', 'req.headers["x-xsrf-token"]', 'res.headers["set-cookie"]'], customLogLevel: () => 'debug' }));
+    app.use(
+      pinoHttp({
+        logger: log,
+        redact: ['req.headers.cookie', 'req.headers["x-xsrf-token"]', 'res.headers["set-cookie"]'],
+        customLogLevel: () => 'debug',
+      }),
+    );
   app.use('/api', api(deps));
   if (options.webRoot) app.use(pages(options.webRoot));
   app.use((_req, _res, next) => next(new AppError('not-found', 'That address is not known.')));
@@ -56,7 +62,8 @@ function api(deps: Deps): express.Router {
 /** A body that is not declared as JSON would be ignored silently; say so instead. */
 const jsonOnly: RequestHandler = (req, _res, next) => {
   const hasBody = req.get('content-length') !== undefined && req.get('content-length') !== '0';
-  if (hasBody && !req.is('application/json')) throw new AppError('wrong-type', 'Send the body as application/json.');
+  if (hasBody && !req.is('application/json'))
+    throw new AppError('wrong-type', 'Send the body as application/json.');
   next();
 };
 
@@ -66,7 +73,8 @@ const nonce: RequestHandler = (_req, res, next) => {
 };
 
 function securityHeaders(https: boolean): RequestHandler {
-  const withNonce = (_req: unknown, res: unknown) => `'nonce-${(res as express.Response).locals['nonce'] as string}'`;
+  const withNonce = (_req: unknown, res: unknown) =>
+    `'nonce-${(res as express.Response).locals['nonce'] as string}'`;
   return helmet({
     contentSecurityPolicy: {
       useDefaults: false,
@@ -96,12 +104,19 @@ function pages(webRoot: string): express.Router {
   router.use(
     express.static(webRoot, {
       index: false,
-      setHeaders: (res, path) => res.setHeader('Cache-Control', /-[A-Z0-9]{8}\./.test(path) ? 'public, max-age=31536000, immutable' : 'no-cache'),
+      setHeaders: (res, path) =>
+        res.setHeader(
+          'Cache-Control',
+          /-[A-Z0-9]{8}\./.test(path) ? 'public, max-age=31536000, immutable' : 'no-cache',
+        ),
     }),
   );
   router.get('/{*any}', (req, res, next) => {
     if (!index || /\.[a-z0-9]{2,5}$/i.test(req.path)) return next();
-    res.set('Cache-Control', 'no-store').type('html').send(index.replaceAll('__CSP_NONCE__', String(res.locals['nonce'])));
+    res
+      .set('Cache-Control', 'no-store')
+      .type('html')
+      .send(index.replaceAll('__CSP_NONCE__', String(res.locals['nonce'])));
   });
   return router;
 }

@@ -48,13 +48,15 @@ export const errorCodes = {
   'wrong-type': { status: 415, title: 'Send JSON' },
   'too-many': { status: 429, title: 'Too many tries' },
   'forecast-unavailable': { status: 503, title: 'The forecast service does not answer' },
-  'internal': { status: 500, title: 'Something went wrong on our side' },
+  internal: { status: 500, title: 'Something went wrong on our side' },
 } as const satisfies Record<string, { status: number; title: string }>;
 export type ErrorCode = keyof typeof errorCodes;
 
 /** 400 with field complaints. */
-export const badInput = (errors: readonly FieldProblem[], message = 'Please correct the marked fields.'): AppError =>
-  new AppError('bad-input', message, errors);
+export const badInput = (
+  errors: readonly FieldProblem[],
+  message = 'Please correct the marked fields.',
+): AppError => new AppError('bad-input', message, errors);
 
 /** 404; also used where something exists but is none of the asker's business. */
 export const notFound = (what: string): AppError => new AppError('not-found', `${what} was not found.`);

@@ -74,7 +74,13 @@ async function caller(app: Express, email: string | null): Promise<Caller> {
     token = tokenIn(answer);
   }
   const send = (verb: Verb) => (path: string) => agent[verb](path).set('X-XSRF-TOKEN', token);
-  return { get: send('get'), post: send('post'), put: send('put'), patch: send('patch'), delete: send('delete') };
+  return {
+    get: send('get'),
+    post: send('post'),
+    put: send('put'),
+    patch: send('patch'),
+    delete: send('delete'),
+  };
 }
 
 function tokenIn(answer: request.Response): string {

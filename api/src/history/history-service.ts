@@ -50,7 +50,13 @@ export function createHistoryService({ db, clock }: Deps): HistoryService {
         .where({ subject_kind: subjectKind, subject_id: subjectId } as never)
         .orderBy('id', 'desc')
         .limit(200);
-      return rows.map((row) => ({ id: row.id, at: row.at, who: row.actor_name, action: row.action, text: row.text }));
+      return rows.map((row) => ({
+        id: row.id,
+        at: row.at,
+        who: row.actor_name,
+        action: row.action,
+        text: row.text,
+      }));
     },
   };
 }

@@ -9,4 +9,5 @@ export interface Actor {
   readonly zone: string;
 }
 
-export const has = (actor: Actor, ...roles: readonly Role[]): boolean => roles.some((role) => actor.roles.includes(role));
+export const has = (actor: Actor, ...roles: readonly Role[]): boolean =>
+  roles.some((role) => actor.roles.includes(role));

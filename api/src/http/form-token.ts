@@ -11,7 +11,8 @@ const headerName = 'x-xsrf-token';
  * every changing call (OWASP Cross-Site Request Forgery Prevention, "signed double-submit cookie").
  */
 export function formToken(config: Config): { middleware: RequestHandler; renew: (res: Response) => void } {
-  const sign = (value: string) => createHmac('sha256', config.SESSION_SECRET).update(`form:${value}`).digest('base64url');
+  const sign = (value: string) =>
+    createHmac('sha256', config.SESSION_SECRET).update(`form:${value}`).digest('base64url');
   const valid = (token: string) => {
     const [value = '', signature = ''] = token.split('.');
     return equal(signature, sign(value));

@@ -35,7 +35,10 @@ function operation(spec: AnyRoute): object {
     parameters: [...parameters(spec.params, 'path'), ...parameters(spec.query, 'query')],
     ...(spec.body ? { requestBody: { required: true, content: json(schemaOf(spec.body, 'input')) } } : {}),
     responses: {
-      [success]: { description: 'Done', ...(spec.response ? { content: json(schemaOf(spec.response, 'output')) } : {}) },
+      [success]: {
+        description: 'Done',
+        ...(spec.response ? { content: json(schemaOf(spec.response, 'output')) } : {}),
+      },
       default: {
         description: 'A problem',
         content: { 'application/problem+json': { schema: { $ref: '#/components/schemas/Problem' } } },

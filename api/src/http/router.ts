@@ -21,7 +21,15 @@ function handle(spec: AnyRoute, checkAnswers: boolean): RequestHandler {
     const query = parse(spec.query, req.query, 'query');
     const body = parse(spec.body, req.body as unknown, '');
     const ifMatch = readIfMatch(req.get('if-match'));
-    const answer: unknown = await spec.handler({ actor, params: params?.data, query, body, ifMatch, req, res } as never);
+    const answer: unknown = await spec.handler({
+      actor,
+      params: params?.data,
+      query,
+      body,
+      ifMatch,
+      req,
+      res,
+    } as never);
     if (spec.raw) return;
     if (spec.response === null) {
       res.status(spec.status ?? 204).end();
@@ -61,5 +69,10 @@ function readIfMatch(header: string | undefined): number | null {
 /** Throws 412 when the caller worked on another version than the present one; `current` goes into the answer. */
 export function checkVersion(ifMatch: number | null, version: number, current?: unknown): void {
   if (ifMatch !== null && ifMatch !== version)
-    throw new AppError('stale', 'Somebody changed this while you had it open. Look at the present state and try again.', [], { current });
+    throw new AppError(
+      'stale',
+      'Somebody changed this while you had it open. Look at the present state and try again.',
+      [],
+      { current },
+    );
 }

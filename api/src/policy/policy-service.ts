@@ -17,7 +17,11 @@ export function createPolicyService({ db }: Deps): PolicyService {
     async current() {
       const row = await db<PolicyRow>('policies').orderBy('id', 'desc').first();
       // A version stored before a setting existed takes that setting's default.
-      if (row) return { id: row.id, policy: policySchema.parse({ ...defaultPolicy, ...(JSON.parse(row.values) as object) }) };
+      if (row)
+        return {
+          id: row.id,
+          policy: policySchema.parse({ ...defaultPolicy, ...(JSON.parse(row.values) as object) }),
+        };
       return { id: null, policy: defaultPolicy };
     },
   };

@@ -25,7 +25,9 @@ declare global {
 /** Sessions in the database, and the actor read fresh at each request: a changed role or a shut account holds at once. */
 export function sessionMiddleware(deps: Deps): RequestHandler[] {
   const authenticator = new passport.Passport();
-  authenticator.serializeUser((user, done) => done(null, { id: user.id, epoch: user.sessionEpoch } satisfies StoredUser));
+  authenticator.serializeUser((user, done) =>
+    done(null, { id: user.id, epoch: user.sessionEpoch } satisfies StoredUser),
+  );
   authenticator.deserializeUser((stored: StoredUser, done) => {
     findAccount(deps.db, { id: stored.id }).then(
       (account) => done(null, account?.active && account.sessionEpoch === stored.epoch ? account : false),
@@ -39,7 +41,12 @@ export function sessionMiddleware(deps: Deps): RequestHandler[] {
       resave: false,
       saveUninitialized: false,
       rolling: true,
-      store: new ConnectSessionKnexStore({ knex: deps.db, tableName: 'sessions', createTable: false, cleanupInterval: 0 }),
+      store: new ConnectSessionKnexStore({
+        knex: deps.db,
+        tableName: 'sessions',
+        createTable: false,
+        cleanupInterval: 0,
+      }),
       cookie: {
         httpOnly: true,
         sameSite: 'lax',
@@ -47,7 +54,7 @@ export function sessionMiddleware(deps: Deps): RequestHandler[] {
         maxAge: 14 * 24 * 3600 * 1000,
       },
     }),
-    authenticator.initialize(),
-    authenticator.session(),
+    authenticator.initialize() as RequestHandler,
+    authenticator.session() as RequestHandler,
   ];
 }

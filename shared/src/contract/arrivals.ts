@@ -26,7 +26,12 @@ export const arrival = z.object({
   collectFrom: instant.nullable(),
   collectBy: instant.nullable(),
   place: z.object({
-    name: z.string(), street: z.string(), city: z.string(), state: z.string(), postalCode: z.string(), zone: z.string(),
+    name: z.string(),
+    street: z.string(),
+    city: z.string(),
+    state: z.string(),
+    postalCode: z.string(),
+    zone: z.string(),
     hours: z.string().nullable(),
   }),
   bring: z.array(z.string()),
@@ -39,7 +44,9 @@ export const arrival = z.object({
 });
 export type Arrival = z.infer<typeof arrival>;
 
-export const morningsBody = z.object({ mornings: z.array(z.object({ date: plainDate, suits: z.boolean() })).max(60) });
+export const morningsBody = z.object({
+  mornings: z.array(z.object({ date: plainDate, suits: z.boolean() })).max(60),
+});
 export type MorningsBody = z.infer<typeof morningsBody>;
 
 export const reportBody = z.object({
@@ -49,7 +56,12 @@ export const reportBody = z.object({
 export type ReportBody = z.input<typeof reportBody>;
 
 export const arrivalSummary = z.object({
-  token: z.string(), code: z.string(), what: z.string(), arrivalDate: plainDate.nullable(), place: z.string(), status: arrival.shape.status,
+  token: z.string(),
+  code: z.string(),
+  what: z.string(),
+  arrivalDate: plainDate.nullable(),
+  place: z.string(),
+  status: arrival.shape.status,
 });
 /** `GET /api/arrivals`: a signed-in buyer's own. */
 export const arrivalList = z.array(arrivalSummary);

@@ -21,15 +21,22 @@ const shape = {
 };
 
 type Body = {
-  kind: 'date' | 'range' | 'yearly'; startDate: string | null; endDate: string | null; rules: string | null;
-  scope: BlackoutScope; carrierId: number | null; state: string | null; counterId: number | null;
+  kind: 'date' | 'range' | 'yearly';
+  startDate: string | null;
+  endDate: string | null;
+  rules: string | null;
+  scope: BlackoutScope;
+  carrierId: number | null;
+  state: string | null;
+  counterId: number | null;
 };
 const rruleLine = /^(RRULE:)?FREQ=YEARLY(;[A-Z]+=[A-Z0-9,+-]+)*$/;
 const consistent = (b: Body, ctx: z.RefinementCtx) => {
   const say = (path: string, message: string) => ctx.addIssue({ code: 'custom', path: [path], message });
   if (b.kind !== 'yearly' && !b.startDate) say('startDate', 'Choose the day.');
   if (b.kind === 'range' && !b.endDate) say('endDate', 'Choose the last day.');
-  if (b.kind === 'range' && b.startDate && b.endDate && b.endDate < b.startDate) say('endDate', 'The last day is before the first.');
+  if (b.kind === 'range' && b.startDate && b.endDate && b.endDate < b.startDate)
+    say('endDate', 'The last day is before the first.');
   if (b.kind === 'yearly' && !b.rules) say('rules', 'Say which day of the year it is.');
   if (b.kind === 'yearly' && b.rules && !b.rules.split('\n').every((text) => rruleLine.test(text.trim())))
     say('rules', 'Use yearly recurrence rules, one a line, like FREQ=YEARLY;BYMONTH=7;BYMONTHDAY=4.');
@@ -38,7 +45,13 @@ const consistent = (b: Body, ctx: z.RefinementCtx) => {
   if (b.scope === 'counter' && !b.counterId) say('counterId', 'Choose the counter.');
 };
 
-export const blackout = z.object({ id, ...shape, source: z.enum(['federal-holiday', 'admin']), createdAt: instant, version });
+export const blackout = z.object({
+  id,
+  ...shape,
+  source: z.enum(['federal-holiday', 'admin']),
+  createdAt: instant,
+  version,
+});
 export type Blackout = z.infer<typeof blackout>;
 
 export const blackoutNew = z
@@ -72,7 +85,15 @@ export const previewRequest = z.object({ blackout: blackoutNew.nullable(), repla
 export const blackoutPreview = z.object({
   days: z.array(plainDate),
   parcels: z.array(
-    z.object({ id, code: z.string(), what: z.string(), breederName: z.string(), buyerName: z.string(), shipDate: plainDate, text: z.string() }),
+    z.object({
+      id,
+      code: z.string(),
+      what: z.string(),
+      breederName: z.string(),
+      buyerName: z.string(),
+      shipDate: plainDate,
+      text: z.string(),
+    }),
   ),
   runs: z.array(z.object({ id, date: plainDate, coordinatorName: z.string(), parcels: z.number().int() })),
   people: z.array(z.object({ name: z.string(), role: z.string() })),

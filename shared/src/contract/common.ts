@@ -36,8 +36,15 @@ export const line = (max: number, what = 'This') =>
 /** A longer text with line breaks, possibly empty. */
 export const prose = (max: number) => z.string().trim().max(max, `At most ${max} characters.`);
 
-export const zipCode = z.string().trim().regex(/^\d{5}$/, 'A ZIP code has five digits.');
-export const stateCode = z.string().trim().toUpperCase().regex(/^[A-Z]{2}$/, 'Use the two-letter state.');
+export const zipCode = z
+  .string()
+  .trim()
+  .regex(/^\d{5}$/, 'A ZIP code has five digits.');
+export const stateCode = z
+  .string()
+  .trim()
+  .toUpperCase()
+  .regex(/^[A-Z]{2}$/, 'Use the two-letter state.');
 export const latitude = z.number().min(-90).max(90);
 export const longitude = z.number().min(-180).max(180);
 /** An IANA zone name, checked by the runtime's own table. */

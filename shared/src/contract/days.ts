@@ -47,11 +47,21 @@ export type DayVerdict = z.infer<typeof dayVerdict>;
 /** What lies in the box: `massG` is one animal's mass in grams, the line weighs `quantity * massG`. */
 export const contentLine = z.object({
   speciesId: z.number({ error: 'Choose a species.' }).int().positive('Choose a species.'),
-  quantity: z.number({ error: 'How many?' }).int('Whole animals only.').min(1, 'At least one.').max(50, 'At most 50 in one box.'),
-  massG: z.number({ error: 'Enter the mass of one animal.' }).positive('Enter the mass of one animal.').max(50000, 'At most 50 kg.'),
+  quantity: z
+    .number({ error: 'How many?' })
+    .int('Whole animals only.')
+    .min(1, 'At least one.')
+    .max(50, 'At most 50 in one box.'),
+  massG: z
+    .number({ error: 'Enter the mass of one animal.' })
+    .positive('Enter the mass of one animal.')
+    .max(50000, 'At most 50 kg.'),
 });
 export type ContentLine = z.infer<typeof contentLine>;
-export const contents = z.array(contentLine).min(1, 'Say what is in the box.').max(10, 'At most ten kinds in one box.');
+export const contents = z
+  .array(contentLine)
+  .min(1, 'Say what is in the box.')
+  .max(10, 'At most ten kinds in one box.');
 
 export const routeCheck = z.object({
   destination: z.union([z.object({ postalCode: zipCode }), z.object({ counterId: id })]),

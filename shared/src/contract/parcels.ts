@@ -3,12 +3,25 @@ import { email, id, instant, line, plainDate, prose, service, stateCode, version
 import { contentLine, contents, dayVerdict } from './days';
 
 export const parcelStates = [
-  'draft', 'seeking', 'booked', 'packed', 'aboard', 'handed-over', 'arrived', 'closed', 'on-hold', 'cancelled',
+  'draft',
+  'seeking',
+  'booked',
+  'packed',
+  'aboard',
+  'handed-over',
+  'arrived',
+  'closed',
+  'on-hold',
+  'cancelled',
 ] as const;
 export const parcelState = z.enum(parcelStates);
 export type ParcelState = z.infer<typeof parcelState>;
 
-export const buyerNew = z.object({ name: line(120, "The buyer's name"), email, phone: line(30).nullable().default(null) });
+export const buyerNew = z.object({
+  name: line(120, "The buyer's name"),
+  email,
+  phone: line(30).nullable().default(null),
+});
 
 export const doorAddress = z.object({
   street: line(160, 'The street'),
@@ -32,10 +45,20 @@ const shape = {
   note: prose(1000).default(''),
 };
 
-type Spans = { service?: 'hold' | 'door'; holdCounterId?: number | null; door?: unknown; readyFrom?: string; latestDate?: string };
+type Spans = {
+  service?: 'hold' | 'door';
+  holdCounterId?: number | null;
+  door?: unknown;
+  readyFrom?: string;
+  latestDate?: string;
+};
 const consistent = (parcel: Spans, ctx: z.RefinementCtx) => {
   if (parcel.service === 'hold' && parcel.holdCounterId == null)
-    ctx.addIssue({ code: 'custom', path: ['holdCounterId'], message: 'Choose the counter where the buyer collects.' });
+    ctx.addIssue({
+      code: 'custom',
+      path: ['holdCounterId'],
+      message: 'Choose the counter where the buyer collects.',
+    });
   if (parcel.service === 'door' && parcel.door == null)
     ctx.addIssue({ code: 'custom', path: ['door'], message: "Enter the buyer's address." });
   if (parcel.readyFrom && parcel.latestDate && parcel.readyFrom > parcel.latestDate)
@@ -78,7 +101,13 @@ export const parcel = z.object({
   totalMassG: z.number(),
   box: z.object({ id, name: z.string(), volumeL: z.number() }),
   service,
-  dropOff: z.object({ counterId: id, name: z.string(), city: z.string(), state: z.string(), zone: z.string() }),
+  dropOff: z.object({
+    counterId: id,
+    name: z.string(),
+    city: z.string(),
+    state: z.string(),
+    zone: z.string(),
+  }),
   destination: z.object({
     counterId: id.nullable(),
     name: z.string(),
@@ -122,7 +151,10 @@ export const parcelList = z.array(parcel);
 
 /** `PUT /api/parcels/:id/booking`. `acceptTight` is the breeder's acceptance in their own words (10 characters at least). */
 export const booking = z.union([
-  z.object({ date: plainDate, acceptTight: z.string().trim().min(10, 'Say in a few words that you accept it.').max(500).optional() }),
+  z.object({
+    date: plainDate,
+    acceptTight: z.string().trim().min(10, 'Say in a few words that you accept it.').max(500).optional(),
+  }),
   z.object({
     flexible: z
       .object({ from: plainDate, to: plainDate })

@@ -1,6 +1,19 @@
 import * as z from 'zod';
 import {
-  email, id, latitude, line, longitude, minuteOfDay, plainDate, prose, role, stateCode, version, weekday, zipCode, zone,
+  email,
+  id,
+  latitude,
+  line,
+  longitude,
+  minuteOfDay,
+  plainDate,
+  prose,
+  role,
+  stateCode,
+  version,
+  weekday,
+  zipCode,
+  zone,
 } from './common';
 import { temperatureUnit } from './session';
 
@@ -74,14 +87,23 @@ export const personNew = z.object({
 export type PersonNew = z.input<typeof personNew>;
 
 export const personPatch = z
-  .object({ ...shape, roles: z.array(role).min(1), active: z.boolean(), breeder: breederProfile.nullable(), coordinator: coordinatorProfile.nullable() })
+  .object({
+    ...shape,
+    roles: z.array(role).min(1),
+    active: z.boolean(),
+    breeder: breederProfile.nullable(),
+    coordinator: coordinatorProfile.nullable(),
+  })
   .partial();
 export type PersonPatch = z.input<typeof personPatch>;
 
 /** `PATCH /api/me`: what a person may change of themselves. */
 export const mePatch = z
   .object({
-    name: shape.name, phone: shape.phone, zone, temperatureUnit,
+    name: shape.name,
+    phone: shape.phone,
+    zone,
+    temperatureUnit,
     breeder: breederProfile.omit({ dropOffCounterId: true }).partial(),
     coordinator: coordinatorProfile.partial(),
   })

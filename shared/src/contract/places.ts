@@ -1,10 +1,30 @@
 import * as z from 'zod';
-import { id, latitude, line, longitude, minuteOfDay, prose, stateCode, version, weekday, zipCode, zone } from './common';
+import {
+  id,
+  latitude,
+  line,
+  longitude,
+  minuteOfDay,
+  prose,
+  stateCode,
+  version,
+  weekday,
+  zipCode,
+  zone,
+} from './common';
 
 export const carrier = z.object({ id, name: z.string(), hubId: id });
 export type Carrier = z.infer<typeof carrier>;
 
-export const hub = z.object({ id, name: z.string(), city: z.string(), state: z.string(), lat: latitude, lon: longitude, zone: z.string() });
+export const hub = z.object({
+  id,
+  name: z.string(),
+  city: z.string(),
+  state: z.string(),
+  lat: latitude,
+  lon: longitude,
+  zone: z.string(),
+});
 export type Hub = z.infer<typeof hub>;
 
 /** Minutes by ISO weekday ("1".."7"); a weekday that is missing has none (no drop-off, or closed). */
@@ -13,7 +33,10 @@ export const hoursByWeekday = z.partialRecord(
   z.enum(['1', '2', '3', '4', '5', '6', '7']),
   z
     .object({ openMinute: minuteOfDay, closeMinute: minuteOfDay })
-    .refine((hours) => hours.openMinute < hours.closeMinute, { path: ['closeMinute'], message: 'It closes before it opens.' }),
+    .refine((hours) => hours.openMinute < hours.closeMinute, {
+      path: ['closeMinute'],
+      message: 'It closes before it opens.',
+    }),
 );
 
 const counterShape = {
@@ -97,6 +120,8 @@ export const postalCodeInfo = z.object({
   lat: latitude,
   lon: longitude,
   zone: z.string(),
-  nearest: z.array(z.object({ counterId: id, name: z.string(), city: z.string(), state: z.string(), miles: z.number() })),
+  nearest: z.array(
+    z.object({ counterId: id, name: z.string(), city: z.string(), state: z.string(), miles: z.number() }),
+  ),
 });
 export type PostalCodeInfo = z.infer<typeof postalCodeInfo>;

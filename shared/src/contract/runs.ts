@@ -2,7 +2,14 @@ import * as z from 'zod';
 import { id, instant, plainDate, prose, version } from './common';
 import { verdict } from './days';
 
-export const runStates = ['proposed', 'confirmed', 'underway', 'handed-over', 'closed', 'called-off'] as const;
+export const runStates = [
+  'proposed',
+  'confirmed',
+  'underway',
+  'handed-over',
+  'closed',
+  'called-off',
+] as const;
 export const runState = z.enum(runStates);
 export type RunState = z.infer<typeof runState>;
 
@@ -46,7 +53,14 @@ export const run = z.object({
   date: plainDate,
   zone: z.string(),
   coordinator: z.object({ id, name: z.string(), capacityL: z.number(), lat: z.number(), lon: z.number() }),
-  counter: z.object({ id, name: z.string(), city: z.string(), state: z.string(), lat: z.number(), lon: z.number() }),
+  counter: z.object({
+    id,
+    name: z.string(),
+    city: z.string(),
+    state: z.string(),
+    lat: z.number(),
+    lon: z.number(),
+  }),
   departAt: instant,
   arriveAt: instant,
   cutOffAt: instant,
@@ -70,7 +84,11 @@ export const run = z.object({
 });
 export type Run = z.infer<typeof run>;
 
-export const runListQuery = z.object({ from: plainDate.optional(), to: plainDate.optional(), state: z.string().optional() });
+export const runListQuery = z.object({
+  from: plainDate.optional(),
+  to: plainDate.optional(),
+  state: z.string().optional(),
+});
 export const runList = z.array(run);
 
 /** Why a parcel found no place, and the cheapest thing that would help. */
@@ -79,7 +97,15 @@ export const unplaced = z.object({
   code: z.string(),
   what: z.string(),
   destination: z.string(),
-  reason: z.enum(['no-safe-day', 'weather-unknown', 'no-driver', 'no-room', 'too-late', 'too-costly', 'not-tried']),
+  reason: z.enum([
+    'no-safe-day',
+    'weather-unknown',
+    'no-driver',
+    'no-room',
+    'too-late',
+    'too-costly',
+    'not-tried',
+  ]),
   text: z.string(),
   help: z.string().nullable(),
 });
@@ -118,15 +144,27 @@ export const runPatch = z
 export type RunPatch = z.input<typeof runPatch>;
 
 /** `POST /api/runs/:id/preview` with the same body: what it would cost and break, nothing saved. */
-export const runPreview = z.object({ before: run, after: run, costChangeCents: z.number().int(), problems: z.array(z.string()) });
+export const runPreview = z.object({
+  before: run,
+  after: run,
+  costChangeCents: z.number().int(),
+  problems: z.array(z.string()),
+});
 export type RunPreview = z.infer<typeof runPreview>;
 
 /** `POST /api/runs` by hand: an empty proposed run on a day. */
-export const runNew = z.object({ coordinatorId: id, date: plainDate, counterId: id.optional(), parcelIds: z.array(id).max(200).default([]) });
+export const runNew = z.object({
+  coordinatorId: id,
+  date: plainDate,
+  counterId: id.optional(),
+  parcelIds: z.array(id).max(200).default([]),
+});
 export type RunNew = z.input<typeof runNew>;
 
 export const departureBody = z.object({ aboardParcelIds: z.array(id).optional() }).default({});
 export const handOverBody = z
-  .object({ tracking: z.array(z.object({ parcelId: id, number: z.string().trim().min(1).max(60) })).default([]) })
+  .object({
+    tracking: z.array(z.object({ parcelId: id, number: z.string().trim().min(1).max(60) })).default([]),
+  })
   .default({ tracking: [] });
 export const callOffBody = z.object({ reason: z.string().trim().min(3, 'Say why.').max(500) });

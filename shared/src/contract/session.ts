@@ -49,7 +49,12 @@ export type AccountLink = z.infer<typeof accountLink>;
 export const accountLinkUse = z.object({ password: newPassword });
 export type AccountLinkUse = z.infer<typeof accountLinkUse>;
 
-export const demoAccount = z.object({ name: z.string(), email: z.string(), roles: z.array(role), about: z.string() });
+export const demoAccount = z.object({
+  name: z.string(),
+  email: z.string(),
+  roles: z.array(role),
+  about: z.string(),
+});
 /** `GET /api/demo`: 404 unless `DEMO=1`. */
 export const demoInfo = z.object({
   accounts: z.array(demoAccount),

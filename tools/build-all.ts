@@ -1,0 +1,4 @@
+import { buildAll } from './build';
+
+/** `npm run build`. */
+void buildAll();
