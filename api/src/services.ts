@@ -9,6 +9,7 @@ import { createParcelsService, type ParcelsService } from './parcels/parcels-ser
 import { createPeopleService, type PeopleService } from './people/people-service';
 import { createPlacesService, type PlacesService } from './places/places-service';
 import { createPolicyService, type PolicyService } from './policy/policy-service';
+import { createRechecksService, type RechecksService } from './rechecks/recheck-service';
 import { createRunsService, type RunsService } from './runs/runs-service';
 import { createSessionService, type SessionService } from './session/session-service';
 
@@ -24,6 +25,7 @@ export interface Services {
   readonly people: PeopleService;
   readonly places: PlacesService;
   readonly policy: PolicyService;
+  readonly rechecks: RechecksService;
   readonly runs: RunsService;
   readonly session: SessionService;
 }
@@ -39,6 +41,7 @@ const makers: { readonly [K in keyof Services]: (deps: Deps) => Services[K] } = 
   people: createPeopleService,
   places: createPlacesService,
   policy: createPolicyService,
+  rechecks: createRechecksService,
   runs: createRunsService,
   session: createSessionService,
 };
