@@ -22,7 +22,9 @@ export interface Account extends Actor {
 export async function findAccount(db: Knex, by: { id: number } | { email: string }): Promise<Account | null> {
   const row = await db<AccountRow>('people').where(by).first();
   if (!row) return null;
-  const roles = await db<{ person_id: number; role: Role }>('person_roles').where({ person_id: row.id }).orderBy('role');
+  const roles = await db<{ person_id: number; role: Role }>('person_roles')
+    .where({ person_id: row.id })
+    .orderBy('role');
   return {
     id: row.id,
     name: row.name,

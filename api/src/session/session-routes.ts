@@ -47,7 +47,7 @@ export function sessionRoutes(deps: Deps): AnyRoute[] {
 /** Passport renews the session id here (session fixation) before the account is written into it. */
 function logIn(req: Request, account: Account): Promise<void> {
   return new Promise((resolve, reject) => {
-    req.logIn(account, (error: unknown) => (error ? reject(error as Error) : resolve()));
+    req.logIn(account, (error: unknown) => (error ? reject(error) : resolve()));
   });
 }
 
@@ -55,7 +55,7 @@ function logOut(req: Request, res: Response): Promise<void> {
   return new Promise((resolve, reject) => {
     req.session.destroy((error: unknown) => {
       res.clearCookie(sessionCookie);
-      if (error) reject(error as Error);
+      if (error) reject(error);
       else resolve();
     });
   });

@@ -2,12 +2,15 @@ import argon2 from 'argon2';
 import { AppError } from '@shared/errors';
 import type { SessionInfo, Me } from '@shared/contract';
 import type { Deps } from '../deps';
+import { sendLink } from './account-links';
 import { findAccount, type Account } from './session-queries';
 
 export interface SessionService {
   /** The account that e-mail and password open; throws `wrong-credentials`, the same for every cause. */
   check(email: string, password: string): Promise<Account>;
   info(personId: number | null): Promise<SessionInfo>;
+  /** Makes a one-time link for a person and puts it into the outbox; older links of the kind end. */
+  sendLink(personId: number, kind: 'invitation' | 'reset'): Promise<void>;
 }
 
 /** OWASP Password Storage Cheat Sheet: argon2id with 19 MiB, 2 passes, 1 lane at least. */
@@ -36,6 +39,7 @@ export function createSessionService(deps: Deps): SessionService {
         throw new AppError('wrong-credentials', 'Check both and try again, or ask for a new password.');
       return account;
     },
+    sendLink: (personId, kind) => sendLink(deps, personId, kind),
     async info(personId) {
       const { policy } = await deps.services.policy.current();
       const circle = { demo: config.DEMO, circleName: policy.circleName, circleZone: policy.circleZone };

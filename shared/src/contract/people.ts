@@ -35,6 +35,10 @@ export const coordinatorProfile = z.object({
 });
 export type CoordinatorProfile = z.infer<typeof coordinatorProfile>;
 
+/** `GET /api/coordinators`: whom a run can be given to. */
+export const coordinatorSummary = z.object({ id, name: z.string(), capacityL: z.number(), freeWeekdays: z.array(weekday) });
+export type CoordinatorSummary = z.infer<typeof coordinatorSummary>;
+
 export const daysAway = z
   .object({ from: plainDate, to: plainDate, note: prose(200).default('') })
   .refine((span) => span.from <= span.to, { path: ['to'], message: 'The last day is before the first.' });
