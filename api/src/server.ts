@@ -18,7 +18,8 @@ export interface RunningSite {
 
 /** Opens and migrates the database, starts the jobs and listens; `port` 0 in the configuration takes a free one. */
 export async function startSite(config: Config, webRoot?: string): Promise<RunningSite> {
-  if (config.DATABASE_FILE !== ':memory:') mkdirSync(dirname(resolve(config.DATABASE_FILE)), { recursive: true });
+  if (config.DATABASE_FILE !== ':memory:')
+    mkdirSync(dirname(resolve(config.DATABASE_FILE)), { recursive: true });
   const db = openDatabase(config.DATABASE_FILE);
   await migrate(db);
   const log = pino({ level: config.LOG_LEVEL });
