@@ -1,0 +1,38 @@
+import { Pipe, type PipeTransform } from '@angular/core';
+import type { TemperatureUnit } from '@shared/contract';
+
+/** Whole degrees in the person's unit, from °F. */
+export const degrees = (valueF: number, unit: TemperatureUnit): number =>
+  Math.round(unit === 'C' ? ((valueF - 32) * 5) / 9 : valueF);
+
+/** `72 °F`. */
+export const temperatureText = (valueF: number, unit: TemperatureUnit): string =>
+  `${degrees(valueF, unit)} °${unit}`;
+
+/** `66 to 79 °F`. */
+export const rangeText = (range: { lowF: number; highF: number }, unit: TemperatureUnit): string =>
+  `${degrees(range.lowF, unit)} to ${temperatureText(range.highF, unit)}`;
+
+/** Reads a sentence with temperatures in °F (as the API writes them) in the person's unit. */
+export function sentenceInUnit(text: string, unit: TemperatureUnit): string {
+  if (unit === 'F') return text;
+  const differences = text.replace(
+    /(-?\d+(?:\.\d+)?) °F (inside|above|below|under|over|outside|warmer|colder)/g,
+    (_all, value: string, word: string) => `${Math.round((Number(value) * 5) / 9)} °C ${word}`,
+  );
+  return differences
+    .replace(
+      /(-?\d+(?:\.\d+)?) (to|and) (-?\d+(?:\.\d+)?) °F/g,
+      (_all, low: string, word: string, high: string) =>
+        `${degrees(Number(low), unit)} ${word} ${temperatureText(Number(high), unit)}`,
+    )
+    .replace(/(-?\d+(?:\.\d+)?) °F/g, (_all, value: string) => temperatureText(Number(value), unit));
+}
+
+/** `{{ 72 | temperature: unit() }}`. */
+@Pipe({ name: 'temperature' })
+export class TemperaturePipe implements PipeTransform {
+  transform(valueF: number | null | undefined, unit: TemperatureUnit): string {
+    return valueF == null ? '' : temperatureText(valueF, unit);
+  }
+}
