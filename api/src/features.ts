@@ -1,10 +1,11 @@
 import type { Deps } from './deps';
 import type { AnyRoute } from './http/route';
+import { parcelsRoutes } from './parcels/parcels-routes';
 import { peopleRoutes } from './people/people-routes';
 import { placesRoutes } from './places/places-routes';
 import { sessionRoutes } from './session/session-routes';
 
 /** Every feature's routes; the router and the OpenAPI document are made from this list. */
 export function allRoutes(deps: Deps): readonly AnyRoute[] {
-  return [...sessionRoutes(deps), ...placesRoutes(deps), ...peopleRoutes(deps)];
+  return [...sessionRoutes(deps), ...placesRoutes(deps), ...peopleRoutes(deps), ...parcelsRoutes(deps)];
 }
