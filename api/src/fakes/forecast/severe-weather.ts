@@ -51,7 +51,7 @@ const rules: readonly Rule[] = [
     event: 'Winter Storm Warning',
     severity: 'Severe',
     leastHours: 6,
-    holds: (weather, tempF, atMs) => tempF > 5 && tempF <= 32 && weather.wetnessAt(atMs) > 0.78,
+    holds: (weather, tempF, atMs) => tempF > 5 && tempF <= 32 && weather.wetnessAt(atMs) > 0.86,
   },
   {
     event: 'Extreme Heat Warning',
