@@ -79,7 +79,7 @@ export function eventsAt(
   nowMs: number,
 ): SevereEvent[] {
   const seat = { lat: middle(place.lat), lon: middle(place.lon) };
-  const derived = script.steady ? [] : rules.flatMap((rule) => spells(rule, script, seed, seat, nowMs));
+  const derived = script.steady ? [] : derivedEvents(script, seed, seat, nowMs);
   const scripted = script.alertsAt(place).map((alert) => ({
     event: alert.event,
     severity: alert.severity,
@@ -94,35 +94,33 @@ export function eventsAt(
 
 const middle = (degrees: number) => (Math.floor(degrees / countyDegrees) + 0.5) * countyDegrees;
 
-function spells(
-  rule: Rule,
-  script: ForecastScript,
-  seed: number,
-  seat: Position,
-  nowMs: number,
-): SevereEvent[] {
+function derivedEvents(script: ForecastScript, seed: number, seat: Position, nowMs: number): SevereEvent[] {
   const weather = weatherAt(seed, seat.lat, seat.lon);
   const { issuedMs } = issueTime(nowMs);
-  const found: { from: number; to: number }[] = [];
-  for (let hour = -24; hour < aheadHours; hour += 1) {
-    const atMs = issuedMs + hour * hourMs;
-    const tempF = weather.forecastF(atMs, issuedMs) + script.deltaF(seat, atMs);
-    if (!rule.holds(weather, tempF, atMs)) continue;
+  const hours = Array.from({ length: 24 + aheadHours }, (_, index) => {
+    const atMs = issuedMs + (index - 24) * hourMs;
+    return { atMs, tempF: weather.forecastF(atMs, issuedMs) + script.deltaF(seat, atMs) };
+  });
+  return rules.flatMap((rule) => {
+    const held = hours.filter(({ atMs, tempF }) => rule.holds(weather, tempF, atMs)).map(({ atMs }) => atMs);
+    return spells(held)
+      .filter(({ fromMs, toMs }) => toMs - fromMs >= rule.leastHours * hourMs)
+      .map((span) => {
+        const { event, severity } = rule;
+        return { ...span, event, severity, endKnown: true, headline: `${event} issued for the area`, seat };
+      });
+  });
+}
+
+/** Hours in a row as spans, over breaks of up to six hours. */
+function spells(hours: readonly number[]): { fromMs: number; toMs: number }[] {
+  const found: { fromMs: number; toMs: number }[] = [];
+  for (const atMs of hours) {
     const last = found.at(-1);
-    if (last && atMs - last.to <= 6 * hourMs) last.to = atMs + hourMs;
-    else found.push({ from: atMs, to: atMs + hourMs });
+    if (last && atMs - last.toMs <= 6 * hourMs) last.toMs = atMs + hourMs;
+    else found.push({ fromMs: atMs, toMs: atMs + hourMs });
   }
-  return found
-    .filter(({ from, to }) => to - from >= rule.leastHours * hourMs)
-    .map(({ from, to }) => ({
-      event: rule.event,
-      severity: rule.severity,
-      fromMs: from,
-      toMs: to,
-      endKnown: true,
-      headline: `${rule.event} issued for the area`,
-      seat,
-    }));
+  return found;
 }
 
 /** `/alerts/active?point=…` in the documented shape: geometry null, times with the place's offset. */
