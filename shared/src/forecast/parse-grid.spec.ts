@@ -53,6 +53,13 @@ describe('a raw grid', () => {
     expect(series.tempsF).toEqual([50, null, null, null, null, 50]);
   });
 
+  it('lays spans that miss the full hour by a second where they belong', () => {
+    const late = { validTime: '2026-12-01T06:00:01+00:00/PT1H', value: 10 };
+    const early = { validTime: '2026-12-01T06:59:59+00:00/PT2H', value: 20 };
+    const series = parseGrid(grid([late, early]));
+    expect(series).toMatchObject({ startMs: Date.parse('2026-12-01T06:00:00Z'), tempsF: [50, 68, 68] });
+  });
+
   it('takes a fill value for none', () => {
     expect(parseGrid(grid([hour(6, 'PT1H', -9999), hour(7, 'PT1H', 10)])).tempsF).toEqual([null, 50]);
   });

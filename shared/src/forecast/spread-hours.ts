@@ -15,22 +15,23 @@ export type HourlySeries = Pick<OutdoorForecast, 'startMs' | 'tempsF' | 'issuedA
 const longestHours = 24 * 30;
 
 /**
- * Spreads merged spans over single hours: every hour that a span touches gets its value, a later span winning. Hours
- * between spans that none covers stay null. The first hour is the start of the earliest span. Throws
- * `forecast-unavailable` for no spans at all, or for more than 30 days.
+ * Spreads merged spans over single hours: an hour takes the value of the span that holds its middle, of two that do the
+ * later one. So spans whose ends miss the full hour by some seconds lie where they belong. Hours between spans stay
+ * null. The first hour is the start of the earliest span. Throws `forecast-unavailable` for no spans at all, or for
+ * more than 30 days.
  */
 export function spreadHours(spans: readonly SpanTemperature[]): Pick<HourlySeries, 'startMs' | 'tempsF'> {
   if (spans.length === 0) throw unreadable('forecast', 'it holds no temperatures.');
-  const startMs = floorHour(spans.reduce((least, span) => Math.min(least, span.startMs), Infinity));
-  const endMs = spans.reduce((most, span) => Math.max(most, span.endMs), -Infinity);
-  const count = Math.ceil((endMs - startMs) / hourMs);
+  const startMs = nearestHour(spans.reduce((least, span) => Math.min(least, span.startMs), Infinity));
+  const endMs = nearestHour(spans.reduce((most, span) => Math.max(most, span.endMs), -Infinity));
+  const count = (endMs - startMs) / hourMs;
   if (count > longestHours) throw unreadable('forecast', `it covers ${Math.round(count / 24)} days.`);
   const tempsF = new Array<number | null>(count).fill(null);
   for (const span of spans) {
-    const from = (floorHour(span.startMs) - startMs) / hourMs;
-    tempsF.fill(span.tempF, from, Math.ceil((span.endMs - startMs) / hourMs));
+    const [from, to] = [span.startMs, span.endMs].map((ms) => (nearestHour(ms) - startMs) / hourMs);
+    tempsF.fill(span.tempF, from, to);
   }
   return { startMs, tempsF };
 }
 
-const floorHour = (ms: number): number => Math.floor(ms / hourMs) * hourMs;
+const nearestHour = (ms: number): number => Math.round(ms / hourMs) * hourMs;
