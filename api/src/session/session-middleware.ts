@@ -1,17 +1,11 @@
-import { ConnectSessionKnexStore } from 'connect-session-knex';
 import type { RequestHandler } from 'express';
 import session from 'express-session';
-import passport from 'passport';
 import type { Deps } from '../deps';
 import type { Actor } from '../http/actor';
-import { findAccount } from './session-queries';
+import { authenticatorOf } from './authenticator';
+import { SessionStore } from './session-store';
 
 export const sessionCookie = 'dayberth.sid';
-
-interface StoredUser {
-  readonly id: number;
-  readonly epoch: number;
-}
 
 declare global {
   // eslint-disable-next-line @typescript-eslint/no-namespace -- the one way Express lets its request user be typed
@@ -22,18 +16,9 @@ declare global {
   }
 }
 
-/** Sessions in the database, and the actor read fresh at each request: a changed role or a shut account holds at once. */
+/** Sessions in the database, and the actor of each request. */
 export function sessionMiddleware(deps: Deps): RequestHandler[] {
-  const authenticator = new passport.Passport();
-  authenticator.serializeUser((user, done) =>
-    done(null, { id: user.id, epoch: user.sessionEpoch } satisfies StoredUser),
-  );
-  authenticator.deserializeUser((stored: StoredUser, done) => {
-    findAccount(deps.db, { id: stored.id }).then(
-      (account) => done(null, account?.active && account.sessionEpoch === stored.epoch ? account : false),
-      (error: unknown) => done(error),
-    );
-  });
+  const authenticator = authenticatorOf(deps);
   return [
     session({
       name: sessionCookie,
@@ -41,12 +26,7 @@ export function sessionMiddleware(deps: Deps): RequestHandler[] {
       resave: false,
       saveUninitialized: false,
       rolling: true,
-      store: new ConnectSessionKnexStore({
-        knex: deps.db,
-        tableName: 'sessions',
-        createTable: false,
-        cleanupInterval: 0,
-      }),
+      store: new SessionStore(deps),
       cookie: {
         httpOnly: true,
         sameSite: 'lax',

@@ -36,3 +36,9 @@ export async function findAccount(db: Knex, by: { id: number } | { email: string
     passwordHash: row.password_hash,
   };
 }
+
+/** Stores a password hash and ends every session of the person. */
+export async function setPassword(db: Knex, id: number, passwordHash: string, at: string): Promise<void> {
+  await db<AccountRow>('people').where({ id }).increment('session_epoch', 1);
+  await db('people').where({ id }).update({ password_hash: passwordHash, updated_at: at });
+}

@@ -36,6 +36,13 @@ export const newPassword = z
   .min(10, 'Use at least 10 characters.')
   .max(200, 'Use at most 200 characters.');
 
+/** `PUT /api/me/password`. */
+export const passwordChange = z.object({
+  current: z.string().min(1, 'Enter your present password.').max(200, 'A password has at most 200 characters.'),
+  next: newPassword,
+});
+export type PasswordChange = z.infer<typeof passwordChange>;
+
 export const resetRequest = z.object({ email });
 export type ResetRequest = z.input<typeof resetRequest>;
 
