@@ -1,3 +1,4 @@
+import { arrivalsRoutes } from './arrivals/arrivals-routes';
 import type { Deps } from './deps';
 import type { AnyRoute } from './http/route';
 import { parcelsRoutes } from './parcels/parcels-routes';
@@ -7,5 +8,11 @@ import { sessionRoutes } from './session/session-routes';
 
 /** Every feature's routes; the router and the OpenAPI document are made from this list. */
 export function allRoutes(deps: Deps): readonly AnyRoute[] {
-  return [...sessionRoutes(deps), ...placesRoutes(deps), ...peopleRoutes(deps), ...parcelsRoutes(deps)];
+  return [
+    ...sessionRoutes(deps),
+    ...placesRoutes(deps),
+    ...peopleRoutes(deps),
+    ...parcelsRoutes(deps),
+    ...arrivalsRoutes(deps),
+  ];
 }

@@ -17,19 +17,36 @@ const bookable: readonly ParcelState[] = ['draft', 'seeking', 'booked', 'on-hold
 const offItsDay = 'It was taken off its day; a new one is not chosen yet.';
 
 /** See `ParcelsService.book`. */
-export async function bookParcel(deps: Deps, actor: Actor, id: number, body: Body, ifMatch: number | null): Promise<Parcel> {
+export async function bookParcel(
+  deps: Deps,
+  actor: Actor,
+  id: number,
+  body: Body,
+  ifMatch: number | null,
+): Promise<Parcel> {
   const parcel = await workOn(deps, actor, id, ifMatch);
   return 'date' in body ? bookDay(deps, actor, parcel, body) : leaveOpen(deps, actor, parcel, body);
 }
 
 /** See `ParcelsService.unbook`; a draft stays as it is. */
-export async function unbookParcel(deps: Deps, actor: Actor, id: number, ifMatch: number | null): Promise<Parcel> {
+export async function unbookParcel(
+  deps: Deps,
+  actor: Actor,
+  id: number,
+  ifMatch: number | null,
+): Promise<Parcel> {
   const parcel = await workOn(deps, actor, id, ifMatch);
   if (parcel.state === 'draft') return parcel;
   return deps.transaction(async (tx) => {
     const now = await unchanged(tx, parcel);
     await leaveRun(tx, actor, now, null);
-    await moveParcel(tx, id, 'draft', actor, now.shipDate ? `Taken off ${longDate(now.shipDate)}.` : 'Put back to a draft.');
+    await moveParcel(
+      tx,
+      id,
+      'draft',
+      actor,
+      now.shipDate ? `Taken off ${longDate(now.shipDate)}.` : 'Put back to a draft.',
+    );
     await tellOffItsDay(tx, now);
     return tx.services.parcels.get(id);
   });
@@ -41,7 +58,10 @@ async function workOn(deps: Deps, actor: Actor, id: number, ifMatch: number | nu
   checkVersion(ifMatch, parcel.version, parcel);
   if (!bookable.includes(parcel.state)) {
     const help = parcel.state === 'packed' ? ' Unpack it first.' : '';
-    throw new AppError('move-not-allowed', `${parcel.code} is ${stateWords[parcel.state]}; its day stands.${help}`);
+    throw new AppError(
+      'move-not-allowed',
+      `${parcel.code} is ${stateWords[parcel.state]}; its day stands.${help}`,
+    );
   }
   return parcel;
 }
@@ -74,9 +94,14 @@ async function leaveOpen(deps: Deps, actor: Actor, parcel: Parcel, { flexible }:
   const days = daysBetween(from, flexible.to) + 1;
   const answer = await deps.services.days.forParcel(parcel.id, { from, days });
   if (answer.days.every((day) => day.verdict === 'shut'))
-    throw new AppError('day-not-offered', `No day from ${longDate(from)} to ${longDate(flexible.to)} is offered for ${parcel.code}.`, [], {
-      days: answer.days,
-    });
+    throw new AppError(
+      'day-not-offered',
+      `No day from ${longDate(from)} to ${longDate(flexible.to)} is offered for ${parcel.code}.`,
+      [],
+      {
+        days: answer.days,
+      },
+    );
   return deps.transaction(async (tx) => {
     const now = await unchanged(tx, parcel);
     await leaveRun(tx, actor, now, null);
@@ -104,14 +129,22 @@ function checkSpan(parcel: Parcel, span: SpanBody['flexible'], today: string): v
 /** 409 with the present verdict and its reasons in a sentence. */
 export function refuseShut(code: string, verdict: DayVerdict): void {
   if (verdict.verdict !== 'shut') return;
-  throw new AppError('day-not-offered', `${longDate(verdict.date)} is shut for ${code}. ${reasonsText(verdict)}`.trim(), [], {
-    current: verdict,
-  });
+  throw new AppError(
+    'day-not-offered',
+    `${longDate(verdict.date)} is shut for ${code}. ${reasonsText(verdict)}`.trim(),
+    [],
+    {
+      current: verdict,
+    },
+  );
 }
 
 /** The reasons behind the class a verdict came to, as sentences. */
 export const reasonsText = (verdict: DayVerdict): string =>
-  verdict.reasons.filter((reason) => reason.verdict === verdict.verdict).map((reason) => reason.text).join(' ');
+  verdict.reasons
+    .filter((reason) => reason.verdict === verdict.verdict)
+    .map((reason) => reason.text)
+    .join(' ');
 
 function requireWords(verdict: DayVerdict, words: string | undefined): string {
   if (words !== undefined) return words;
@@ -134,12 +167,14 @@ export async function unchanged(tx: Deps, before: Parcel): Promise<Parcel> {
 /** Out of its run, unless that goes on the very day. */
 async function leaveRun(tx: Deps, actor: Actor, parcel: Parcel, date: string | null): Promise<void> {
   if (!parcel.run || parcel.run.date === date) return;
-  const why = date === null ? `${parcel.code} was taken off its day.` : `${parcel.code} ships on another day now.`;
+  const why =
+    date === null ? `${parcel.code} was taken off its day.` : `${parcel.code} ships on another day now.`;
   await tx.services.runs.takeOut(parcel.id, why, actor);
 }
 
 /** The buyer had been told a day: it does not stand any more. */
 async function tellOffItsDay(tx: Deps, before: Parcel): Promise<void> {
   const { id: parcelId, shipDate } = before;
-  if (shipDate !== null) await tx.services.notices.tell({ kind: 'parcel-on-hold', parcelId, reason: offItsDay, shipDate });
+  if (shipDate !== null)
+    await tx.services.notices.tell({ kind: 'parcel-on-hold', parcelId, reason: offItsDay, shipDate });
 }

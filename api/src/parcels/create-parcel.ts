@@ -13,7 +13,11 @@ import { insertParcel } from './parcel-writes';
 export const newArrivalToken = (): string => randomBytes(32).toString('base64url');
 
 /** Enters a draft for the breeder themselves, or (coordinator, admin) for a named one. Throws 400 field by field. */
-export async function createParcel(deps: Deps, actor: Actor, body: z.output<typeof parcelNew>): Promise<Parcel> {
+export async function createParcel(
+  deps: Deps,
+  actor: Actor,
+  body: z.output<typeof parcelNew>,
+): Promise<Parcel> {
   const breeder = await breederFor(deps, actor, body.breederId);
   const dropOffCounterId = body.dropOffCounterId ?? breeder.breeder?.dropOffCounterId;
   if (dropOffCounterId === undefined)
@@ -49,11 +53,13 @@ async function breederFor(deps: Deps, actor: Actor, breederId: number | undefine
   const complain = (message: string) => badInput([{ path: 'breederId', message }]);
   const forOthers = has(actor, 'coordinator', 'admin');
   if (breederId === undefined && !has(actor, 'breeder')) throw complain('Say which breeder it is for.');
-  if (breederId !== undefined && breederId !== actor.id && !forOthers) throw complain('You enter parcels for yourself only.');
+  if (breederId !== undefined && breederId !== actor.id && !forOthers)
+    throw complain('You enter parcels for yourself only.');
   const breeder = await people.get(breederId ?? actor.id).catch((error: unknown) => {
     if (isAppError(error, 'not-found')) throw complain('That breeder is not on the list.');
     throw error;
   });
-  if (!breeder.active || !breeder.roles.includes('breeder')) throw complain('That person does not ship as a breeder.');
+  if (!breeder.active || !breeder.roles.includes('breeder'))
+    throw complain('That person does not ship as a breeder.');
   return breeder;
 }

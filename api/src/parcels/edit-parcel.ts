@@ -31,7 +31,15 @@ const labels: Readonly<Record<Field, string>> = {
 };
 /** What a day's verdict rests on. */
 const weighty: readonly Field[] = [
-  'contents', 'boxId', 'service', 'holdCounterId', 'door', 'readyFrom', 'latestDate', 'lastMealDate', 'dropOffCounterId',
+  'contents',
+  'boxId',
+  'service',
+  'holdCounterId',
+  'door',
+  'readyFrom',
+  'latestDate',
+  'lastMealDate',
+  'dropOffCounterId',
 ];
 
 /** A patch held against the parcel as it stands. */
@@ -44,7 +52,13 @@ interface Edit {
 }
 
 /** See `ParcelsService.edit`. */
-export async function editParcel(deps: Deps, actor: Actor, id: number, patch: Patch, ifMatch: number | null): Promise<Parcel> {
+export async function editParcel(
+  deps: Deps,
+  actor: Actor,
+  id: number,
+  patch: Patch,
+  ifMatch: number | null,
+): Promise<Parcel> {
   const before = await deps.services.parcels.forActor(actor, id);
   checkVersion(ifMatch, before.version, before);
   const edit = await heldAgainst(deps, before, patch);
@@ -55,9 +69,17 @@ export async function editParcel(deps: Deps, actor: Actor, id: number, patch: Pa
     if (now.run && edit.changed.some((field) => field === 'boxId' || field === 'dropOffCounterId'))
       await tx.services.runs.takeOut(id, `${now.code} was changed.`, actor);
     if (Object.keys(columns).length > 0)
-      await saveMove(tx, await rowOf(tx, id), { ...columns, ...keptSpan(edit) }, actor, changeText(edit), verdict);
+      await saveMove(
+        tx,
+        await rowOf(tx, id),
+        { ...columns, ...keptSpan(edit) },
+        actor,
+        changeText(edit),
+        verdict,
+      );
     if (edit.changed.includes('contents')) await writeContents(tx.db, id, edit.facts.contents);
-    if (columns.buyer_id !== undefined) await tx.services.notices.tell({ kind: 'parcel-created', parcelId: id });
+    if (columns.buyer_id !== undefined)
+      await tx.services.notices.tell({ kind: 'parcel-created', parcelId: id });
     if (patch.state) await changeState(tx, actor, now, patch.state);
     return tx.services.parcels.get(id);
   });
@@ -81,19 +103,34 @@ async function heldAgainst(deps: Deps, before: Parcel, patch: Patch): Promise<Ed
 
 function checkOpenToChange(parcel: Parcel, changed: readonly Field[]): void {
   if (!editable.includes(parcel.state))
-    throw new AppError('conflict', `${parcel.code} is ${stateWords[parcel.state]}: only its note and tracking number can still change.`);
+    throw new AppError(
+      'conflict',
+      `${parcel.code} is ${stateWords[parcel.state]}: only its note and tracking number can still change.`,
+    );
   const onTheRoad = parcel.run && parcel.run.state !== 'proposed';
   const blocked = changed.find((field) => field === 'boxId' || field === 'dropOffCounterId');
   if (onTheRoad && blocked)
-    throw new AppError('conflict', `${parcel.code} is on a confirmed run: take it off its day first, then change ${labels[blocked]}.`);
+    throw new AppError(
+      'conflict',
+      `${parcel.code} is on a confirmed run: take it off its day first, then change ${labels[blocked]}.`,
+    );
 }
 
 /** The verdict of a booked parcel's day with the change made; 409 when the day would not be booked like this. */
 async function askAgain(deps: Deps, edit: Edit) {
   const { before, checked, changed } = edit;
-  if (before.state !== 'booked' || before.shipDate === null || !checked || !changed.some((field) => weighty.includes(field)))
+  if (
+    before.state !== 'booked' ||
+    before.shipDate === null ||
+    !checked ||
+    !changed.some((field) => weighty.includes(field))
+  )
     return null;
-  const verdict = await deps.services.days.forDate(before.id, before.shipDate, withFacts(before, edit.facts, checked));
+  const verdict = await deps.services.days.forDate(
+    before.id,
+    before.shipDate,
+    withFacts(before, edit.facts, checked),
+  );
   refuseShut(before.code, verdict);
   if (verdict.verdict !== 'open' && before.acceptedTight === null)
     throw new AppError(
@@ -105,13 +142,17 @@ async function askAgain(deps: Deps, edit: Edit) {
   return verdict;
 }
 
-async function fieldColumns(tx: Deps, { before, facts, changed, checked, patch }: Edit): Promise<Partial<ParcelRow>> {
+async function fieldColumns(
+  tx: Deps,
+  { before, facts, changed, checked, patch }: Edit,
+): Promise<Partial<ParcelRow>> {
   const columns: Partial<ParcelRow> = {};
   if (changed.length > 0) {
     if (checked) Object.assign(columns, columnsOf(facts, checked.doorPlace));
     else columns.note = facts.note;
   }
-  if (patch.trackingNumber !== undefined && patch.trackingNumber !== before.trackingNumber) columns.tracking_number = patch.trackingNumber;
+  if (patch.trackingNumber !== undefined && patch.trackingNumber !== before.trackingNumber)
+    columns.tracking_number = patch.trackingNumber;
   if (checked && facts.buyer.email !== before.buyer.email) {
     columns.buyer_id = await tx.services.people.ensureBuyer({ ...facts.buyer, zone: checked.zone });
     // The first buyer holds the old link, and what they said of their mornings is not the new one's word.
@@ -133,20 +174,32 @@ function keptSpan({ before, facts }: Edit): Partial<ParcelRow> {
     : { flexible_from: facts.readyFrom, flexible_to: facts.latestDate };
 }
 
-async function changeState(tx: Deps, actor: Actor, before: Parcel, to: NonNullable<Patch['state']>): Promise<void> {
+async function changeState(
+  tx: Deps,
+  actor: Actor,
+  before: Parcel,
+  to: NonNullable<Patch['state']>,
+): Promise<void> {
   if (before.state === to) return;
-  const refuse = (how: string) => new AppError('move-not-allowed', `${before.code} is ${stateWords[before.state]}. ${how}`);
+  const refuse = (how: string) =>
+    new AppError('move-not-allowed', `${before.code} is ${stateWords[before.state]}. ${how}`);
   if (to === 'booked' && before.state !== 'packed') throw refuse('Book a day for it instead.');
   const texts = { packed: 'Packed.', booked: 'Unpacked again.', cancelled: 'Cancelled.', closed: 'Closed.' };
-  if (to === 'cancelled' && before.run) await tx.services.runs.takeOut(before.id, `${before.code} was cancelled.`, actor);
+  if (to === 'cancelled' && before.run)
+    await tx.services.runs.takeOut(before.id, `${before.code} was cancelled.`, actor);
   await moveParcel(tx, before.id, to, actor, texts[to]);
   if (to === 'cancelled')
-    await tx.services.notices.tell({ kind: 'parcel-cancelled', parcelId: before.id, shipDate: before.shipDate });
+    await tx.services.notices.tell({
+      kind: 'parcel-cancelled',
+      parcelId: before.id,
+      shipDate: before.shipDate,
+    });
 }
 
 function changeText({ before, changed, patch }: Edit): string {
   const parts = changed.map((field) => labels[field]);
-  if (patch.trackingNumber !== undefined && patch.trackingNumber !== before.trackingNumber) parts.push('the tracking number');
+  if (patch.trackingNumber !== undefined && patch.trackingNumber !== before.trackingNumber)
+    parts.push('the tracking number');
   const last = parts.pop() ?? 'nothing';
   return `Changed ${parts.length > 0 ? `${parts.join(', ')} and ${last}` : last}.`;
 }
@@ -157,5 +210,9 @@ const same = (a: unknown, b: unknown): boolean => JSON.stringify(sorted(a)) === 
 function sorted(value: unknown): unknown {
   if (Array.isArray(value)) return value.map(sorted);
   if (value === null || typeof value !== 'object') return value;
-  return Object.fromEntries(Object.entries(value).sort(([a], [b]) => (a < b ? -1 : 1)).map(([key, inner]) => [key, sorted(inner)]));
+  return Object.fromEntries(
+    Object.entries(value)
+      .sort(([a], [b]) => (a < b ? -1 : 1))
+      .map(([key, inner]) => [key, sorted(inner)]),
+  );
 }

@@ -21,10 +21,20 @@ export const stateWords: Readonly<Record<ParcelState, string>> = {
 };
 
 /** Moves a parcel along the state table inside the present transaction; see `ParcelsService.move`. */
-export async function moveParcel(tx: Deps, id: number, to: ParcelState, who: Who, text: string, set: MoveSet = {}): Promise<void> {
+export async function moveParcel(
+  tx: Deps,
+  id: number,
+  to: ParcelState,
+  who: Who,
+  text: string,
+  set: MoveSet = {},
+): Promise<void> {
   const row = await rowOf(tx, id);
   if (!canMoveParcel(row.state, to))
-    throw new AppError('move-not-allowed', `${row.code} is ${stateWords[row.state]}; from there it cannot become ${stateWords[to]}.`);
+    throw new AppError(
+      'move-not-allowed',
+      `${row.code} is ${stateWords[row.state]}; from there it cannot become ${stateWords[to]}.`,
+    );
   const columns = { state: to, ...comesWith(row, to, text), ...columnsOfSet(set) };
   if (to === 'booked' && (columns.ship_date ?? row.ship_date) === null)
     throw new AppError('move-not-allowed', `${row.code} needs a day to be booked on.`);
@@ -45,7 +55,14 @@ export async function saveMove(
   if (verdict) {
     const { id: policyId } = await tx.services.policy.current();
     const words = columns.accepted_tight ?? null;
-    await insertBookingVerdict(tx.db, { parcelId: row.id, verdict, policyId, words, by: who?.id ?? null, now });
+    await insertBookingVerdict(tx.db, {
+      parcelId: row.id,
+      verdict,
+      policyId,
+      words,
+      by: who?.id ?? null,
+      now,
+    });
   }
   await tx.services.history.add({
     actorId: who?.id ?? null,
@@ -89,7 +106,9 @@ function columnsOfSet(set: MoveSet): Partial<ParcelRow> {
     ...(set.holdReason === undefined ? {} : { hold_reason: set.holdReason }),
     ...(set.shareCents === undefined ? {} : { share_cents: set.shareCents }),
     ...(set.trackingNumber === undefined ? {} : { tracking_number: set.trackingNumber }),
-    ...(set.flexible === undefined ? {} : { flexible_from: set.flexible?.from ?? null, flexible_to: set.flexible?.to ?? null }),
+    ...(set.flexible === undefined
+      ? {}
+      : { flexible_from: set.flexible?.from ?? null, flexible_to: set.flexible?.to ?? null }),
     ...(set.acceptedTight === undefined ? {} : { accepted_tight: set.acceptedTight }),
   };
 }

@@ -14,14 +14,21 @@ export function checkMayBook(actor: Actor, parcel: Parcel): void {
 }
 
 /** The filter of a list call, cut down to what the actor may see. Throws 400 for a state that does not exist. */
-export function listFilter(actor: Actor, query: { state?: string; q?: string; breederId?: number }): ParcelFilter {
+export function listFilter(
+  actor: Actor,
+  query: { state?: string; q?: string; breederId?: number },
+): ParcelFilter {
   const ownOnly = !has(actor, 'coordinator', 'admin');
   const states = query.state ? statesOf(query.state) : undefined;
   const text = query.q?.trim();
   return {
     ...(states ? { states } : {}),
     ...(text ? { text } : {}),
-    ...(ownOnly ? { breederId: actor.id } : query.breederId === undefined ? {} : { breederId: query.breederId }),
+    ...(ownOnly
+      ? { breederId: actor.id }
+      : query.breederId === undefined
+        ? {}
+        : { breederId: query.breederId }),
   };
 }
 

@@ -5,7 +5,9 @@ import { commonBand } from '@shared/parcels/common-band';
 import type { Deps } from '../deps';
 
 /** What a person says of a parcel: the fields of `POST` with the drop-off counter known. */
-export type ParcelFacts = Omit<z.output<typeof parcelNew>, 'breederId' | 'dropOffCounterId'> & { readonly dropOffCounterId: number };
+export type ParcelFacts = Omit<z.output<typeof parcelNew>, 'breederId' | 'dropOffCounterId'> & {
+  readonly dropOffCounterId: number;
+};
 
 /** The facts of a stored parcel, in the shape they were entered in. */
 export function factsOf(parcel: Parcel): ParcelFacts {
@@ -41,10 +43,15 @@ export interface CheckedFacts {
  * Holds the facts against the circle's places and species. What stood in `stored` already may stay although it was
  * retired since. Throws 400 with a complaint at each field's path.
  */
-export async function checkFacts(deps: Deps, facts: ParcelFacts, stored: ParcelFacts | null): Promise<CheckedFacts> {
+export async function checkFacts(
+  deps: Deps,
+  facts: ParcelFacts,
+  stored: ParcelFacts | null,
+): Promise<CheckedFacts> {
   const { places } = deps.services;
   const [counters, species, boxes] = [await places.counters(), await places.species(), await places.boxes()];
-  const doorPlace = facts.service === 'door' && facts.door ? await places.postalCode(facts.door.postalCode) : null;
+  const doorPlace =
+    facts.service === 'door' && facts.door ? await places.postalCode(facts.door.postalCode) : null;
   const dropOff = counters.find((one) => one.id === facts.dropOffCounterId);
   const today = deps.clock.today(dropOff?.zone ?? 'America/Chicago');
   const errors = [
@@ -75,7 +82,13 @@ export function withFacts(parcel: Parcel, facts: ParcelFacts, checked: CheckedFa
     totalMassG: facts.contents.reduce((sum, line) => sum + line.quantity * line.massG, 0),
     box: { id: box.id, name: box.name, volumeL: box.volumeL },
     service: facts.service,
-    dropOff: { counterId: dropOff.id, name: dropOff.name, city: dropOff.city, state: dropOff.state, zone: dropOff.zone },
+    dropOff: {
+      counterId: dropOff.id,
+      name: dropOff.name,
+      city: dropOff.city,
+      state: dropOff.state,
+      zone: dropOff.zone,
+    },
     destination: hold ? { ...placeOf(hold), counterId: hold.id } : (door ?? parcel.destination),
     readyFrom: facts.readyFrom,
     latestDate: facts.latestDate,
@@ -83,15 +96,28 @@ export function withFacts(parcel: Parcel, facts: ParcelFacts, checked: CheckedFa
   };
 }
 
-const placeOf = ({ name, street, city, state, postalCode, zone }: Counter) => ({ name, street, city, state, postalCode, zone });
+const placeOf = ({ name, street, city, state, postalCode, zone }: Counter) => ({
+  name,
+  street,
+  city,
+  state,
+  postalCode,
+  zone,
+});
 
-function checkContents(facts: ParcelFacts, stored: ParcelFacts | null, all: readonly Species[]): FieldProblem[] {
+function checkContents(
+  facts: ParcelFacts,
+  stored: ParcelFacts | null,
+  all: readonly Species[],
+): FieldProblem[] {
   const kept = new Set(stored?.contents.map((line) => line.speciesId));
   const byId = new Map(all.map((one) => [one.id, one]));
   const errors = facts.contents.flatMap((line, i) => {
     const one = byId.get(line.speciesId);
     if (kept.has(line.speciesId) || one?.active) return [];
-    const message = one ? `The circle does not ship the ${one.commonName} any more.` : 'That species is not on the list.';
+    const message = one
+      ? `The circle does not ship the ${one.commonName} any more.`
+      : 'That species is not on the list.';
     return [{ path: `contents.${i}.speciesId`, message }];
   });
   const known = facts.contents.flatMap((line) => byId.get(line.speciesId) ?? []);
@@ -113,7 +139,9 @@ function checkContents(facts: ParcelFacts, stored: ParcelFacts | null, all: read
 function checkBox(facts: ParcelFacts, stored: ParcelFacts | null, boxes: readonly Box[]): FieldProblem[] {
   const box = boxes.find((one) => one.id === facts.boxId);
   if (facts.boxId === stored?.boxId || box?.active) return [];
-  return [{ path: 'boxId', message: box ? 'That box is not used any more.' : 'That box is not on the list.' }];
+  return [
+    { path: 'boxId', message: box ? 'That box is not used any more.' : 'That box is not on the list.' },
+  ];
 }
 
 function checkRoute(
@@ -123,15 +151,35 @@ function checkRoute(
   doorPlace: PostalCodeInfo | null,
 ): FieldProblem[] {
   const errors: FieldProblem[] = [];
-  const complain = (path: string, storedId: number | null | undefined, id: number, can: 'canHold' | 'canDropOff', cannot: string) => {
+  const complain = (
+    path: string,
+    storedId: number | null | undefined,
+    id: number,
+    can: 'canHold' | 'canDropOff',
+    cannot: string,
+  ) => {
     const counter = counters.find((one) => one.id === id);
     if (id === storedId || (counter?.active && counter[can])) return;
     errors.push({ path, message: counter?.active ? cannot : 'That counter is not on the list.' });
   };
-  complain('dropOffCounterId', stored?.dropOffCounterId, facts.dropOffCounterId, 'canDropOff', 'That counter takes no drop-offs.');
+  complain(
+    'dropOffCounterId',
+    stored?.dropOffCounterId,
+    facts.dropOffCounterId,
+    'canDropOff',
+    'That counter takes no drop-offs.',
+  );
   if (facts.service === 'hold') {
-    if (facts.holdCounterId === null) errors.push({ path: 'holdCounterId', message: 'Choose the counter where the buyer collects.' });
-    else complain('holdCounterId', stored?.holdCounterId, facts.holdCounterId, 'canHold', 'That counter holds no parcels for pickup.');
+    if (facts.holdCounterId === null)
+      errors.push({ path: 'holdCounterId', message: 'Choose the counter where the buyer collects.' });
+    else
+      complain(
+        'holdCounterId',
+        stored?.holdCounterId,
+        facts.holdCounterId,
+        'canHold',
+        'That counter holds no parcels for pickup.',
+      );
   } else if (!facts.door) errors.push({ path: 'door', message: "Enter the buyer's address." });
   else if (!doorPlace) errors.push({ path: 'door.postalCode', message: 'That ZIP code is not known.' });
   else if (doorPlace.state !== facts.door.state)
@@ -140,7 +188,8 @@ function checkRoute(
 }
 
 function checkDates(facts: ParcelFacts, stored: ParcelFacts | null, today: string): FieldProblem[] {
-  if (facts.latestDate < facts.readyFrom) return [{ path: 'latestDate', message: 'The latest day is before the first.' }];
+  if (facts.latestDate < facts.readyFrom)
+    return [{ path: 'latestDate', message: 'The latest day is before the first.' }];
   if (facts.latestDate < today && facts.latestDate !== stored?.latestDate)
     return [{ path: 'latestDate', message: 'The latest day is over.' }];
   return [];

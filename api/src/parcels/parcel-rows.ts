@@ -115,7 +115,11 @@ export function toParcel(row: JoinedRow, parts: ParcelParts, publicUrl: string):
       scientificName: line.scientific_name,
     })),
     totalMassG: contents.reduce((sum, line) => sum + line.quantity * line.mass_g, 0),
-    box: { id: row.box_id, name: row.box_name, volumeL: row.box_length_in * row.box_width_in * row.box_height_in * cubicInchL },
+    box: {
+      id: row.box_id,
+      name: row.box_name,
+      volumeL: row.box_length_in * row.box_width_in * row.box_height_in * cubicInchL,
+    },
     service: row.service,
     dropOff: {
       counterId: row.drop_off_counter_id,
@@ -136,13 +140,19 @@ export function toParcel(row: JoinedRow, parts: ParcelParts, publicUrl: string):
     run:
       row.run_id === null
         ? null
-        : { id: row.run_id, state: row.run_state ?? '', date: row.run_date ?? '', coordinatorName: row.run_coordinator ?? '' },
+        : {
+            id: row.run_id,
+            state: row.run_state ?? '',
+            date: row.run_date ?? '',
+            coordinatorName: row.run_coordinator ?? '',
+          },
     shareCents: row.share_cents,
     trackingNumber: row.tracking_number,
     arrivalUrl: `${publicUrl.replace(/\/$/, '')}/arrival/${row.arrival_token}`,
     mornings: (parts.mornings.get(row.id) ?? []).map(({ date, suits }) => ({ date, suits: Boolean(suits) })),
     note: row.note,
-    bookedVerdict: verdict && verdict.ship_date === row.ship_date ? (JSON.parse(verdict.verdict) as DayVerdict) : null,
+    bookedVerdict:
+      verdict && verdict.ship_date === row.ship_date ? (JSON.parse(verdict.verdict) as DayVerdict) : null,
     createdAt: row.created_at,
     updatedAt: row.updated_at,
     version: row.version,

@@ -16,7 +16,12 @@ export interface NewParcel {
  * Writes a parcel and its contents; answers its id. The code is the next running number of its prefix: the first insert
  * takes SQLite's write lock, so no other connection can count between it and the second statement.
  */
-export async function insertParcel(db: Knex, facts: ParcelFacts, door: PostalCodeInfo | null, made: NewParcel): Promise<number> {
+export async function insertParcel(
+  db: Knex,
+  facts: ParcelFacts,
+  door: PostalCodeInfo | null,
+  made: NewParcel,
+): Promise<number> {
   const [id] = (await db('parcels').insert({
     ...columnsOf(facts, door),
     code: `new ${made.token}`,
@@ -31,28 +36,49 @@ export async function insertParcel(db: Knex, facts: ParcelFacts, door: PostalCod
     .where('code', 'like', `${made.codePrefix}-%`)
     .max({ number: db.raw('cast(substr(code, ?) as integer)', [made.codePrefix.length + 2]) })
     .first()) as { number: number | null } | undefined;
-  await db('parcels').where({ id }).update({ code: `${made.codePrefix}-${String((last?.number ?? 0) + 1).padStart(4, '0')}` });
+  await db('parcels')
+    .where({ id })
+    .update({ code: `${made.codePrefix}-${String((last?.number ?? 0) + 1).padStart(4, '0')}` });
   await writeContents(db, id, facts.contents);
   return id;
 }
 
 /** Changes columns of a parcel and raises its version. */
-export async function updateParcel(db: Knex, id: number, set: Partial<ParcelRow>, now: string): Promise<void> {
-  await db('parcels').where({ id }).update({ ...set, updated_at: now, version: db.raw('version + 1') });
+export async function updateParcel(
+  db: Knex,
+  id: number,
+  set: Partial<ParcelRow>,
+  now: string,
+): Promise<void> {
+  await db('parcels')
+    .where({ id })
+    .update({ ...set, updated_at: now, version: db.raw('version + 1') });
 }
 
 /** Puts the contents in the place of those there were. */
 export async function writeContents(db: Knex, id: number, contents: ParcelFacts['contents']): Promise<void> {
   await db('parcel_contents').where({ parcel_id: id }).delete();
   await db('parcel_contents').insert(
-    contents.map((line) => ({ parcel_id: id, species_id: line.speciesId, quantity: line.quantity, mass_g: line.massG })),
+    contents.map((line) => ({
+      parcel_id: id,
+      species_id: line.speciesId,
+      quantity: line.quantity,
+      mass_g: line.massG,
+    })),
   );
 }
 
 /** Keeps the verdict a booking was made on, with the settings' version and the words of acceptance. */
 export async function insertBookingVerdict(
   db: Knex,
-  made: { parcelId: number; verdict: DayVerdict; policyId: number | null; words: string | null; by: number | null; now: string },
+  made: {
+    parcelId: number;
+    verdict: DayVerdict;
+    policyId: number | null;
+    words: string | null;
+    by: number | null;
+    now: string;
+  },
 ): Promise<void> {
   await db('booking_verdicts').insert({
     parcel_id: made.parcelId,

@@ -1,6 +1,14 @@
 import type { Knex } from 'knex';
 import type { Parcel, ParcelState } from '@shared/contract';
-import { toParcel, type ContentRow, type JoinedRow, type MorningRow, type ParcelParts, type ParcelRow, type VerdictRow } from './parcel-rows';
+import {
+  toParcel,
+  type ContentRow,
+  type JoinedRow,
+  type MorningRow,
+  type ParcelParts,
+  type ParcelRow,
+  type VerdictRow,
+} from './parcel-rows';
 
 export interface ParcelFilter {
   readonly ids?: readonly number[];
@@ -19,13 +27,21 @@ const chunkSize = 2000;
 export async function findParcels(db: Knex, filter: ParcelFilter, publicUrl: string): Promise<Parcel[]> {
   if (filter.ids?.length === 0 || filter.states?.length === 0) return [];
   const rows = await joinedRows(db, filter);
-  const parts = await partsOf(db, rows.map((row) => row.id));
+  const parts = await partsOf(
+    db,
+    rows.map((row) => row.id),
+  );
   return rows.map((row) => toParcel(row, parts, publicUrl));
 }
 
 /** One parcel's own row, or undefined. */
-export function findParcelRow(db: Knex, where: { id: number } | { arrival_token: string }): Promise<ParcelRow | undefined> {
-  return db<ParcelRow>('parcels').where(where as Partial<ParcelRow>).first();
+export function findParcelRow(
+  db: Knex,
+  where: { id: number } | { arrival_token: string },
+): Promise<ParcelRow | undefined> {
+  return db<ParcelRow>('parcels')
+    .where(where as Partial<ParcelRow>)
+    .first();
 }
 
 async function joinedRows(db: Knex, filter: ParcelFilter): Promise<JoinedRow[]> {
@@ -46,12 +62,27 @@ function joined(db: Knex): Knex.QueryBuilder {
     .leftJoin('runs as run', (on) => on.on('run.id', 'rp.run_id').andOnVal('run.state', '<>', 'called-off'))
     .leftJoin('people as driver', 'driver.id', 'run.coordinator_id')
     .select('p.*', {
-      breeder_name: 'breeder.name', breeder_business: 'breeder.business_name', buyer_email: 'buyer.email',
-      box_name: 'box.name', box_length_in: 'box.length_in', box_width_in: 'box.width_in', box_height_in: 'box.height_in',
-      drop_name: 'drop.name', drop_city: 'drop.city', drop_state: 'drop.state', drop_zone: 'drop.zone',
-      hold_name: 'hold.name', hold_street: 'hold.street', hold_city: 'hold.city', hold_state: 'hold.state',
-      hold_postal_code: 'hold.postal_code', hold_zone: 'hold.zone',
-      run_id: 'run.id', run_state: 'run.state', run_date: 'run.date', run_coordinator: 'driver.name',
+      breeder_name: 'breeder.name',
+      breeder_business: 'breeder.business_name',
+      buyer_email: 'buyer.email',
+      box_name: 'box.name',
+      box_length_in: 'box.length_in',
+      box_width_in: 'box.width_in',
+      box_height_in: 'box.height_in',
+      drop_name: 'drop.name',
+      drop_city: 'drop.city',
+      drop_state: 'drop.state',
+      drop_zone: 'drop.zone',
+      hold_name: 'hold.name',
+      hold_street: 'hold.street',
+      hold_city: 'hold.city',
+      hold_state: 'hold.state',
+      hold_postal_code: 'hold.postal_code',
+      hold_zone: 'hold.zone',
+      run_id: 'run.id',
+      run_state: 'run.state',
+      run_date: 'run.date',
+      run_coordinator: 'driver.name',
     });
 }
 
@@ -69,7 +100,14 @@ function narrowed(query: Knex.QueryBuilder, filter: ParcelFilter): Knex.QueryBui
 function matching(query: Knex.QueryBuilder, text: string): void {
   const pattern = `%${text.replace(/[\\%_]/g, (sign) => `\\${sign}`)}%`;
   const columns = [
-    'p.code', 'p.buyer_name', 'buyer.email', 'breeder.name', 'breeder.business_name', 'hold.city', 'hold.name', 'p.door_city',
+    'p.code',
+    'p.buyer_name',
+    'buyer.email',
+    'breeder.name',
+    'breeder.business_name',
+    'hold.city',
+    'hold.name',
+    'p.door_city',
     'p.tracking_number',
   ];
   for (const column of columns) void query.orWhereRaw("?? like ? escape '\\'", [column, pattern]);
@@ -89,11 +127,22 @@ async function partsOf(db: Knex, ids: readonly number[]): Promise<ParcelParts> {
         .join('species as s', 's.id', 'pc.species_id')
         .whereIn('pc.parcel_id', some)
         .orderBy('pc.id')
-        .select('pc.parcel_id', 'pc.species_id', 'pc.quantity', 'pc.mass_g', 's.common_name', 's.scientific_name')) as ContentRow[]),
+        .select(
+          'pc.parcel_id',
+          'pc.species_id',
+          'pc.quantity',
+          'pc.mass_g',
+          's.common_name',
+          's.scientific_name',
+        )) as ContentRow[]),
     );
     mornings.push(...(await db<MorningRow>('parcel_mornings').whereIn('parcel_id', some).orderBy('date')));
     const newest = db('booking_verdicts').max('id').whereIn('parcel_id', some).groupBy('parcel_id');
-    verdicts.push(...((await db('booking_verdicts').whereIn('id', newest).select('parcel_id', 'ship_date', 'verdict')) as VerdictRow[]));
+    verdicts.push(
+      ...((await db('booking_verdicts')
+        .whereIn('id', newest)
+        .select('parcel_id', 'ship_date', 'verdict')) as VerdictRow[]),
+    );
   }
   return { contents: byParcel(contents), mornings: byParcel(mornings), verdicts: byParcel(verdicts) };
 }
@@ -109,5 +158,7 @@ function byParcel<T extends { parcel_id: number }>(rows: readonly T[]): Readonly
 }
 
 function chunks<T>(items: readonly T[]): T[][] {
-  return Array.from({ length: Math.ceil(items.length / chunkSize) }, (_, i) => items.slice(i * chunkSize, (i + 1) * chunkSize));
+  return Array.from({ length: Math.ceil(items.length / chunkSize) }, (_, i) =>
+    items.slice(i * chunkSize, (i + 1) * chunkSize),
+  );
 }

@@ -1,5 +1,14 @@
 import * as z from 'zod';
-import { booking, historyEntry, idParams, parcel, parcelList, parcelListQuery, parcelNew, parcelPatch } from '@shared/contract';
+import {
+  booking,
+  historyEntry,
+  idParams,
+  parcel,
+  parcelList,
+  parcelListQuery,
+  parcelNew,
+  parcelPatch,
+} from '@shared/contract';
 import type { Deps } from '../deps';
 import { route, type AnyRoute } from '../http/route';
 

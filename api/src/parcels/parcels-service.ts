@@ -62,7 +62,12 @@ export interface ParcelsService {
   /** Enters a draft. Throws 400 field by field. */
   create(actor: Actor, body: z.output<typeof parcelNew>): Promise<Parcel>;
   /** Changes fields or the state. Throws 400, 404, 409 (too late, or its day would not be offered), 412. */
-  edit(actor: Actor, id: number, patch: z.output<typeof parcelPatch>, ifMatch: number | null): Promise<Parcel>;
+  edit(
+    actor: Actor,
+    id: number,
+    patch: z.output<typeof parcelPatch>,
+    ifMatch: number | null,
+  ): Promise<Parcel>;
   /** Books a day or leaves a span open. Throws 400, 403, 404, 409 with the present verdict, 412. */
   book(actor: Actor, id: number, body: z.output<typeof booking>, ifMatch: number | null): Promise<Parcel>;
   /** Back to a draft, out of its run. Throws 403, 404, 409, 412. */

@@ -1,6 +1,10 @@
 import { commonBand } from './common-band';
 
-const species = (commonName: string, bandLowF: number, bandHighF: number) => ({ commonName, bandLowF, bandHighF });
+const species = (commonName: string, bandLowF: number, bandHighF: number) => ({
+  commonName,
+  bandLowF,
+  bandHighF,
+});
 
 // Expected values by hand: the highest low and the lowest high.
 describe('commonBand', () => {
@@ -14,12 +18,20 @@ describe('commonBand', () => {
   });
 
   it('names the two that do not go together', () => {
-    const kinds = [species('corn snake', 60, 86), species('hellbender', 40, 60), species('uromastyx', 80, 105)];
+    const kinds = [
+      species('corn snake', 60, 86),
+      species('hellbender', 40, 60),
+      species('uromastyx', 80, 105),
+    ];
     expect(commonBand(kinds)).toEqual({ ok: false, warmest: 'uromastyx', coolest: 'hellbender' });
   });
 
   it('finds none where the bands only touch', () => {
-    expect(commonBand([species('a', 60, 70), species('b', 70, 80)])).toEqual({ ok: false, warmest: 'b', coolest: 'a' });
+    expect(commonBand([species('a', 60, 70), species('b', 70, 80)])).toEqual({
+      ok: false,
+      warmest: 'b',
+      coolest: 'a',
+    });
   });
 
   it('is null for an empty box', () => {

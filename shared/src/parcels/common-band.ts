@@ -22,6 +22,7 @@ export function commonBand(species: readonly Banded[]): CommonBand | null {
     if (one.bandLowF > warmest.bandLowF) warmest = one;
     if (one.bandHighF < coolest.bandHighF) coolest = one;
   }
-  if (warmest.bandLowF < coolest.bandHighF) return { ok: true, lowF: warmest.bandLowF, highF: coolest.bandHighF };
+  if (warmest.bandLowF < coolest.bandHighF)
+    return { ok: true, lowF: warmest.bandLowF, highF: coolest.bandHighF };
   return { ok: false, warmest: warmest.commonName, coolest: coolest.commonName };
 }

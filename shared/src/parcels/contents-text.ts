@@ -9,7 +9,8 @@ interface NamedLine {
  */
 export function contentsText(contents: readonly NamedLine[]): string {
   const counts = new Map<string, number>();
-  for (const line of contents) counts.set(line.commonName, (counts.get(line.commonName) ?? 0) + line.quantity);
+  for (const line of contents)
+    counts.set(line.commonName, (counts.get(line.commonName) ?? 0) + line.quantity);
   return [...counts].map(([name, count]) => `${count} ${count === 1 ? name : plural(name)}`).join(', ');
 }
 
