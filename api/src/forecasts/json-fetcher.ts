@@ -167,13 +167,15 @@ function detailOf(text: string): string {
 
 async function bodyText(response: Response, maxBytes: number): Promise<string> {
   const parts: Uint8Array[] = [];
+  const reader = response.body?.getReader();
   let bytes = 0;
-  for await (const part of (response.body ?? []) as AsyncIterable<Uint8Array>) {
-    bytes += part.byteLength;
-    // Leaving the loop by the throw cancels the stream.
-    if (bytes > maxBytes)
+  for (let part = await reader?.read(); part && !part.done; part = await reader?.read()) {
+    bytes += part.value.byteLength;
+    if (bytes > maxBytes) {
+      await reader?.cancel();
       throw new Failure('The forecast service sent far more than a forecast.', null, false);
-    parts.push(part);
+    }
+    parts.push(part.value);
   }
   return Buffer.concat(parts).toString('utf8');
 }
