@@ -165,11 +165,17 @@ function detailOf(text: string): string {
   return type ? ` ${type}` : '';
 }
 
+/** What the two libraries of types that this file is checked with, Node's and the browser's, agree on. */
+interface BodyReader {
+  read(): Promise<{ readonly value?: Uint8Array | undefined }>;
+  cancel(): Promise<void>;
+}
+
 async function bodyText(response: Response, maxBytes: number): Promise<string> {
   const parts: Uint8Array[] = [];
-  const reader = response.body?.getReader();
+  const reader: BodyReader | undefined = response.body?.getReader();
   let bytes = 0;
-  for (let part = await reader?.read(); part && !part.done; part = await reader?.read()) {
+  for (let part = await reader?.read(); part?.value; part = await reader?.read()) {
     bytes += part.value.byteLength;
     if (bytes > maxBytes) {
       await reader?.cancel();
