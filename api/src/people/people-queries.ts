@@ -79,23 +79,21 @@ const toRow = (person: PersonFields): Record<string, unknown> => ({
 
 /** People with roles and profiles, by name; all of them, or those with the ids. */
 export async function findPeople(db: Knex, ids?: readonly number[]): Promise<Person[]> {
-  const only = (column: string) => (query: Knex.QueryBuilder) => {
-    if (ids) query.whereIn(column, [...ids]);
-  };
-  const rows = await db<PersonRow>('people').modify(only('id')).orderBy(['name', 'id']);
-  const roles = await db<{ person_id: number; role: Role }>('person_roles')
-    .modify(only('person_id'))
-    .orderBy('role');
-  const breeders = await db<BreederRow>('breeder_profiles').modify(only('person_id'));
-  const coordinators = await db<CoordinatorRow>('coordinator_profiles').modify(only('person_id'));
+  const only = (table: string, column: string): Knex.QueryBuilder =>
+    ids ? db(table).whereIn(column, [...ids]) : db(table);
+  const rows = (await only('people', 'id').orderBy(['name', 'id'])) as PersonRow[];
+  const roles = (await only('person_roles', 'person_id').orderBy('role')) as {
+    person_id: number;
+    role: Role;
+  }[];
+  const breeders = (await only('breeder_profiles', 'person_id')) as BreederRow[];
+  const coordinators = (await only('coordinator_profiles', 'person_id')) as CoordinatorRow[];
   const rolesOf = new Map<number, Role[]>();
   for (const row of roles as { person_id: number; role: Role }[])
     rolesOf.set(row.person_id, [...(rolesOf.get(row.person_id) ?? []), row.role]);
-  const breederOf = new Map((breeders as BreederRow[]).map((row) => [row.person_id, toBreeder(row)]));
-  const coordinatorOf = new Map(
-    (coordinators as CoordinatorRow[]).map((row) => [row.person_id, toCoordinator(row)]),
-  );
-  return (rows as PersonRow[]).map((row) => ({
+  const breederOf = new Map(breeders.map((row) => [row.person_id, toBreeder(row)]));
+  const coordinatorOf = new Map(coordinators.map((row) => [row.person_id, toCoordinator(row)]));
+  return rows.map((row) => ({
     id: row.id,
     email: row.email,
     roles: rolesOf.get(row.id) ?? [],
@@ -138,7 +136,7 @@ export async function findIdByEmail(db: Knex, email: string): Promise<number | n
 }
 
 export async function insertPerson(db: Knex, person: PersonFields, at: string): Promise<number> {
-  const [id] = (await db('people').insert({ ...toRow(person), created_at: at, updated_at: at })) as number[];
+  const [id] = await db<PersonRow>('people').insert({ ...toRow(person), created_at: at, updated_at: at });
   return id ?? 0;
 }
 

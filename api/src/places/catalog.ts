@@ -60,7 +60,7 @@ export function createCatalog<New extends object, Full extends New & { id: numbe
     add: (actor, body) =>
       deps.transaction(async (tx) => {
         await kind.check?.(tx, body, null);
-        const [id] = (await tx.db(kind.table).insert(kind.toRow(body))) as number[];
+        const [id]: number[] = await tx.db(kind.table).insert(kind.toRow(body));
         const added = await read(tx, id ?? 0);
         await note(tx, actor, added, null);
         return added;

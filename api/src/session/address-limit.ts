@@ -22,6 +22,6 @@ export function addressLimit(
   });
   return (req, res) =>
     new Promise((resolve, reject) => {
-      void middleware(req, res, (error?: unknown) => (error ? reject(error as Error) : resolve()));
+      void middleware(req, res, (error?: Error) => (error ? reject(error) : resolve()));
     });
 }

@@ -44,23 +44,23 @@ export function authenticatorOf(deps: Deps): passport.Authenticator {
 /** The account that the e-mail and password in the body open. Throws what the session service threw. */
 export function authenticate(deps: Deps, req: Request, res: Response): Promise<Account> {
   return new Promise((resolve, reject) => {
-    const answer = (error: unknown, account: Account | false | undefined) => {
-      if (error) reject(error as Error);
+    const answer = (error: Error | null, account: Account | false | undefined) => {
+      if (error) reject(error);
       else if (account) resolve(account);
       else reject(new AppError('wrong-credentials', 'Check both and try again, or ask for a new password.'));
     };
     const handler = authenticatorOf(deps).authenticate('local', answer) as (
       req: Request,
       res: Response,
-      next: (error?: unknown) => void,
+      next: (error: Error) => void,
     ) => void;
-    handler(req, res, (error) => reject(error as Error));
+    handler(req, res, (error) => reject(error));
   });
 }
 
 /** Writes the account into a new session; passport renews the session id before (session fixation). */
 export function logIn(req: Request, account: Account): Promise<void> {
   return new Promise((resolve, reject) => {
-    req.logIn(account, (error: unknown) => (error ? reject(error as Error) : resolve()));
+    req.logIn(account, (error?: Error | null) => (error ? reject(error) : resolve()));
   });
 }

@@ -141,9 +141,9 @@ async function withRetryAfter<T>(res: Response, work: () => Promise<T>): Promise
 
 function logOut(req: Request, res: Response): Promise<void> {
   return new Promise((resolve, reject) => {
-    req.session.destroy((error: unknown) => {
+    req.session.destroy((error?: Error | null) => {
       res.clearCookie(sessionCookie);
-      if (error) reject(error as Error);
+      if (error) reject(error);
       else resolve();
     });
   });

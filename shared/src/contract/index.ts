@@ -8,4 +8,5 @@ export * from './parcels';
 export * from './runs';
 export * from './blackouts';
 export * from './arrivals';
+export * from './calendars';
 export * from './desk';

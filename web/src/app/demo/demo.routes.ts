@@ -1,3 +1,6 @@
 import type { Routes } from '@angular/router';
 
-export const routes: Routes = [];
+/** `/demo` */
+export const routes: Routes = [
+  { path: '', title: 'Demo', loadComponent: () => import('./demo-page/demo-page').then((m) => m.DemoPage) },
+];

@@ -1,5 +1,5 @@
 import type { Parcel, Run } from '@shared/contract';
-import { addDays, datesBetween, isoWeekday, startOfWeek } from '../ui/plain-dates';
+import { addDays, datesBetween, dateText, isoWeekday, startOfWeek } from '../ui/plain-dates';
 
 export interface BoardDay {
   readonly date: string;
@@ -21,26 +21,33 @@ export interface BoardWeek {
 /** Runs that are over are told on their own pages; the board shows the work. */
 const offBoard = new Set(['called-off']);
 
-/** The weeks of the board from the one that holds `today` on. Weekend days show only when a run goes then. */
+/** Which weeks the board shows: from a Sunday on, so many. */
+export interface BoardSpan {
+  readonly start: string;
+  readonly count: number;
+}
+
+/** The weeks of the board. Weekend days, and past ones, show only when a run goes then or parcels are booked. */
 export function boardWeeks(
   runs: readonly Run[],
   waiting: readonly Parcel[],
   today: string,
-  weeks: number,
+  span: BoardSpan,
 ): BoardWeek[] {
-  const first = startOfWeek(today);
-  return Array.from({ length: weeks }, (_, index) => {
-    const start = addDays(first, index * 7);
+  return Array.from({ length: span.count }, (_, index) => {
+    const start = addDays(span.start, index * 7);
     const days = datesBetween(start, addDays(start, 6))
       .map((date) => boardDay(date, runs, waiting, today))
       .filter((day) => isShown(day));
-    return { start, title: weekTitle(index), days };
+    return { start, title: weekTitle(start, today), days };
   }).filter((week) => week.days.length > 0);
 }
 
-function weekTitle(index: number): string {
-  if (index === 0) return 'This week';
-  return index === 1 ? 'Next week' : `In ${index} weeks`;
+function weekTitle(start: string, today: string): string {
+  const present = startOfWeek(today);
+  if (start === present) return 'This week';
+  if (start === addDays(present, 7)) return 'Next week';
+  return `Week of ${dateText(addDays(start, 1), { month: 'long', day: 'numeric' })}`;
 }
 
 function boardDay(date: string, runs: readonly Run[], waiting: readonly Parcel[], today: string): BoardDay {

@@ -1,7 +1,7 @@
 import { HttpClient, HttpHeaders } from '@angular/common/http';
 import { inject, Injectable } from '@angular/core';
 import type { Observable } from 'rxjs';
-import type { Parcel, Person, Proposal, Run, RunNew, RunPatch, RunPreview } from '@shared/contract';
+import type { CoordinatorSummary, Parcel, Proposal, Run, RunNew, RunPatch, RunPreview } from '@shared/contract';
 
 /** One parcel's tracking number, as it is written down at the counter. */
 export interface TrackingEntry {
@@ -28,8 +28,8 @@ export class RunsApi {
     return this.http.get<Parcel[]>('/api/parcels', { params: { state: 'seeking,booked,packed,on-hold' } });
   }
 
-  drivers(): Observable<Person[]> {
-    return this.http.get<Person[]>('/api/people', { params: { role: 'coordinator' } });
+  drivers(): Observable<CoordinatorSummary[]> {
+    return this.http.get<CoordinatorSummary[]>('/api/coordinators');
   }
 
   propose(): Observable<Proposal> {

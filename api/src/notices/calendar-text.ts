@@ -1,0 +1,103 @@
+import ical, {
+  ICalAlarmType,
+  ICalAttendeeRole,
+  ICalAttendeeStatus,
+  ICalAttendeeType,
+  type ICalCalendar,
+  ICalCalendarMethod,
+  ICalEventStatus,
+} from 'ical-generator';
+import { DateTime } from 'luxon';
+import { timeZoneBlock } from './time-zone-block';
+import { oneLine } from './words';
+
+/** What an event says, without who is invited and how often it has changed. Times are instants. */
+export interface PlannedEvent {
+  readonly start: string;
+  readonly end: string;
+  /** The clock the times are written in. */
+  readonly zone: string;
+  readonly summary: string;
+  readonly description: string;
+  readonly location: string;
+  readonly url: string | null;
+  /** A reminder so many minutes before the start; null for none. */
+  readonly alarmMinutes: number | null;
+}
+
+export interface Mailbox {
+  readonly name: string;
+  readonly email: string;
+}
+
+export interface CalendarEntry {
+  readonly uid: string;
+  readonly sequence: number;
+  /** UTC ISO instant of this message. */
+  readonly stamp: string;
+  readonly event: PlannedEvent;
+  readonly organizer: Mailbox;
+  /** Exactly the person addressed; null in a published feed (RFC 5546 3.2.1 allows no ATTENDEE there). */
+  readonly attendee: Mailbox | null;
+}
+
+/**
+ * One iTIP message (RFC 5546) with a VTIMEZONE for each TZID, CRLF lines of at most 75 octets. CANCEL carries
+ * STATUS:CANCELLED and no alarm.
+ */
+export function calendarText(
+  method: 'REQUEST' | 'CANCEL' | 'PUBLISH',
+  entries: readonly CalendarEntry[],
+  name?: string,
+): string {
+  const calendar = ical({
+    prodId: { company: 'Dayberth', product: 'Dayberth', language: 'EN' },
+    method: ICalCalendarMethod[method],
+    ...(name === undefined ? {} : { name }),
+    // A zone for the whole calendar would make DTSTAMP local time; RFC 5545 3.8.7.2 wants it in UTC.
+    timezone: { name: null, generator: timeZoneBlock },
+  });
+  for (const entry of entries) addEvent(calendar, entry, method === 'CANCEL');
+  return `${calendar.toString()}\r\n`;
+}
+
+function addEvent(calendar: ICalCalendar, entry: CalendarEntry, cancelled: boolean): void {
+  const { event } = entry;
+  const zone = timeZoneBlock(event.zone) === null ? null : event.zone;
+  const at = (instant: string) => DateTime.fromISO(instant, { zone: zone ?? 'utc' });
+  const created = calendar.createEvent({
+    id: entry.uid,
+    sequence: entry.sequence,
+    stamp: DateTime.fromISO(entry.stamp, { zone: 'utc' }),
+    start: at(event.start),
+    end: at(event.end),
+    timezone: zone,
+    summary: oneLine(event.summary),
+    description: event.description,
+    location: oneLine(event.location),
+    ...(event.url === null ? {} : { url: event.url }),
+    status: cancelled ? ICalEventStatus.CANCELLED : ICalEventStatus.CONFIRMED,
+    organizer: { name: parameterText(entry.organizer.name), email: entry.organizer.email },
+    attendees: entry.attendee === null ? [] : [attendee(entry.attendee)],
+  });
+  if (event.alarmMinutes !== null && !cancelled)
+    created.createAlarm({
+      type: ICalAlarmType.display,
+      triggerBefore: event.alarmMinutes * 60,
+      description: oneLine(event.summary),
+    });
+}
+
+function attendee(person: Mailbox) {
+  return {
+    name: parameterText(person.name),
+    email: person.email,
+    rsvp: true,
+    role: ICalAttendeeRole.REQ,
+    status: ICalAttendeeStatus.NEEDSACTION,
+    type: ICalAttendeeType.INDIVIDUAL,
+  };
+}
+
+/** A parameter value may hold neither quotes nor control characters (RFC 5545 3.2), and knows no backslash escapes. */
+const parameterText = (text: string): string => oneLine(text).replaceAll('"', '’').replaceAll('\\', '/');

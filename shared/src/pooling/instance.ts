@@ -1,0 +1,94 @@
+import type { FixedRun, PoolParcel, PoolProblem, Slot } from './problem';
+import { slotKey } from './problem';
+import { createRunPricer, type RunPricer } from './run-pricer';
+
+/** A slot with what may be put into it. */
+export interface SlotInfo extends Slot {
+  readonly index: number;
+  /** Slots of the same coordinator and day share a group: one of them at most is driven. */
+  readonly group: string;
+  /** Room left in litres (a confirmed run's load is taken off). */
+  readonly roomL: number;
+  readonly fixed: FixedRun | null;
+  /** Parcels (indices) that may ride here. */
+  readonly eligible: readonly number[];
+}
+
+export interface Option {
+  readonly slot: number;
+  readonly penaltyCents: number;
+}
+
+/** The problem with its slots laid out and runs priced; parcels and slots are named by their index. */
+export interface Instance {
+  readonly problem: PoolProblem;
+  readonly parcels: readonly PoolParcel[];
+  readonly slots: readonly SlotInfo[];
+  /** By parcel: where it may ride. */
+  readonly options: readonly (readonly Option[])[];
+  readonly pricer: RunPricer;
+  /** What driving to these breeders costs the plan in this slot; 0 for none, Infinity when it cannot be driven. */
+  cents(slot: SlotInfo, breederIds: readonly number[]): number;
+}
+
+/** Lays out the slots: coordinators who are free and not taken, counters that take drop-offs that day. */
+export function createInstance(problem: PoolProblem): Instance {
+  const pricer = createRunPricer(problem);
+  const slots = slotsOf(problem);
+  const options = problem.parcels.map((_, index) =>
+    slots.filter((slot) => slot.eligible.includes(index)).map((slot) => ({ slot: slot.index, penaltyCents: penalty(problem, index, slot.date) })),
+  );
+  const base = slots.map((slot) => (slot.fixed ? fixedCents(pricer, slot, slot.fixed) : 0));
+  return {
+    problem, parcels: problem.parcels, slots, options, pricer,
+    cents(slot, breederIds) {
+      const { fixed } = slot;
+      if (fixed) {
+        const extra = breederIds.filter((id) => !fixed.breederIds.includes(id));
+        if (extra.length === 0) return 0;
+        const run = pricer.price(slot, [...fixed.breederIds, ...extra]);
+        return run ? run.drivingCents - (base[slot.index] as number) : Infinity;
+      }
+      if (breederIds.length === 0) return 0;
+      const run = pricer.price(slot, breederIds);
+      return run ? run.drivingCents + problem.costs.runFixedCents : Infinity;
+    },
+  };
+}
+
+const fixedCents = (pricer: RunPricer, slot: SlotInfo, fixed: FixedRun): number =>
+  (pricer.price(slot, fixed.breederIds) ?? pricer.relaxed(slot, fixed.breederIds)).drivingCents;
+
+const penalty = (problem: PoolProblem, parcel: number, date: string): number =>
+  problem.parcels[parcel]?.days.find((day) => day.date === date)?.penaltyCents ?? 0;
+
+function slotsOf(problem: PoolProblem): SlotInfo[] {
+  const fixedBy = new Map(problem.fixedRuns.map((run) => [`${run.coordinatorId}|${run.date}`, run]));
+  const dates = [...new Set(problem.parcels.flatMap(({ days }) => days.map(({ date }) => date)))].sort();
+  const found: SlotInfo[] = [];
+  for (const date of dates)
+    for (const coordinator of problem.coordinators)
+      for (const counter of problem.counters) {
+        const slot = { coordinatorId: coordinator.id, date, counterId: counter.id };
+        const group = `${coordinator.id}|${date}`;
+        const fixed = fixedBy.get(group) ?? null;
+        if (fixed ? fixed.counterId !== counter.id : !coordinator.freeDates.includes(date)) continue;
+        if (counter.cutOffMinutes[date] === undefined) continue;
+        const roomL = coordinator.capacityL - (fixed?.volumeL ?? 0);
+        const eligible = problem.parcels.flatMap((parcel, index) => (mayRide(problem, parcel, slot, roomL) ? [index] : []));
+        if (eligible.length > 0) found.push({ ...slot, index: found.length, group, roomL, fixed, eligible });
+      }
+  return found;
+}
+
+function mayRide(problem: PoolProblem, parcel: PoolParcel, slot: Slot, roomL: number): boolean {
+  if (parcel.counterId !== slot.counterId || parcel.volumeL > roomL + volumeTolerance) return false;
+  if (!parcel.days.some(({ date }) => date === slot.date)) return false;
+  const breeder = problem.breeders.find(({ id }) => id === parcel.breederId);
+  if (!breeder || breeder.daysAway.includes(slot.date)) return false;
+  const pin = problem.pins.find(({ parcelId }) => parcelId === parcel.id);
+  return !pin || slotKey(pin) === slotKey(slot);
+}
+
+/** Litres: sums of box volumes are not exact in binary. */
+export const volumeTolerance = 1e-6;

@@ -1,0 +1,142 @@
+import type { RangeF } from '../contract/days';
+import { addDays } from '../calendar/add-days';
+import { cutOffInstant } from '../calendar/cut-off-instant';
+import { dateAt } from '../calendar/date-at';
+import { daysBetween } from '../calendar/days-between';
+import type { WorkPlace } from '../calendar/is-working-day';
+import { localInstant } from '../calendar/local-instant';
+import { slackDays } from '../calendar/slack-days';
+import { startOfLocalDay } from '../calendar/start-of-local-day';
+import { contentsLimits, type ContentsLimits } from './contents-limits';
+import type { DayQuestion } from './day-question';
+import { placeWeather, type PlaceWeather } from './place-weather';
+
+/** Where the route spends which hours, and what is known of the weather there. */
+export interface RoutePlace {
+  readonly role: 'origin' | 'hub' | 'destination';
+  /** The city, as sentences name it. */
+  readonly name: string;
+  readonly zone: string;
+  readonly weather: PlaceWeather | null;
+  /** The hours whose weather counts, UTC epoch ms; `toMs` does not count. */
+  readonly fromMs: number;
+  readonly toMs: number;
+  /** The hours for which an alert counts: while the parcel may be there. */
+  readonly alertFromMs: number;
+  readonly alertToMs: number;
+}
+
+/** What the checks share about one day, worked out once. */
+export interface DayFacts extends DayQuestion {
+  readonly nowMs: number;
+  readonly today: string;
+  readonly leadDays: number;
+  readonly arrivalDate: string;
+  readonly arrivalAtMs: number;
+  readonly originWork: WorkPlace;
+  readonly destinationWork: WorkPlace;
+  readonly destinationName: string;
+  readonly destinationCity: string;
+  readonly destinationZone: string;
+  /** Null: the counter takes nothing on that weekday. */
+  readonly cutOffMs: number | null;
+  readonly slackDays: number;
+  readonly limits: ContentsLimits;
+  /** Origin, hub, destination. */
+  readonly places: readonly RoutePlace[];
+  /** From packing to collecting. */
+  readonly hoursInBox: number;
+  /** Lowest and highest of the route's places and days; null without any forecast. */
+  readonly outdoor: RangeF | null;
+}
+
+const hour = 60;
+/** Minutes from packing to collecting, and hours from "ready" to "collected" at a counter (design 5.2, assumptions). */
+const packedBeforeCollectingMinutes = 60;
+const collectedAfterReadyMs = 2 * 3_600_000;
+/** A parcel leaves the drop-off counter at 20:00 and is through the sort hub well before 06:00 (design 5.2, assumptions). */
+const leavesCounterMinute = 20 * hour;
+const hubNight = { fromMinute: 20 * hour, toMinute: 6 * hour };
+/** Door service is planned to be done by noon (design 5.2, assumption). */
+export const doorMinute = 12 * hour;
+const mondayToFriday = [1, 2, 3, 4, 5];
+
+/** Works out what all checks of one ship day share. Throws RangeError when the calendar does not reach far enough. */
+export function dayFacts(question: DayQuestion): DayFacts {
+  const { origin, shipDate, destination, policy, calendar } = question;
+  const nowMs = Date.parse(question.now);
+  const today = dateAt(nowMs, origin.zone);
+  const arrivalDate = addDays(shipDate, 1);
+  const to = destinationFacts(question);
+  const arrivalAtMs = localInstant(arrivalDate, to.readyMinute, to.zone);
+  const cutOffMs = cutOffInstant(origin, shipDate);
+  // On a day without a cut-off the verdict is shut anyway; the afternoon stands in so that the weather can still be shown.
+  const handOverMs = cutOffMs ?? localInstant(shipDate, 17 * hour, origin.zone);
+  const packedMs = handOverMs - (policy.packedBeforeCutOffMinutes + packedBeforeCollectingMinutes) * 60_000;
+  const collectedMs = arrivalAtMs + (destination.kind === 'hold' ? collectedAfterReadyMs : 0);
+  const places = routePlaces(question, { arrivalDate, packedMs, city: to.city, zone: to.zone });
+  return {
+    ...question,
+    nowMs,
+    today,
+    leadDays: daysBetween(today, shipDate),
+    arrivalDate,
+    arrivalAtMs,
+    originWork: { workingDays: origin.workingDays, carrierId: origin.carrierId, state: origin.state, counterId: origin.id },
+    destinationWork: to.work,
+    destinationName: to.name,
+    destinationCity: to.city,
+    destinationZone: to.zone,
+    cutOffMs,
+    slackDays: slackDays(to.work, arrivalDate, calendar),
+    limits: contentsLimits(question.contents),
+    places,
+    hoursInBox: (collectedMs - packedMs) / 3_600_000,
+    outdoor: outdoorRange(places, shipDate, arrivalDate),
+  };
+}
+
+function destinationFacts({ destination, origin }: DayQuestion) {
+  if (destination.kind === 'hold') {
+    const { counter } = destination;
+    const work = { workingDays: counter.workingDays, carrierId: counter.carrierId, state: counter.state, counterId: counter.id };
+    return { work, name: counter.name, city: counter.city, zone: counter.zone, readyMinute: counter.commitMinute };
+  }
+  const { door } = destination;
+  const work = { workingDays: mondayToFriday, carrierId: origin.carrierId, state: door.state, counterId: null };
+  return { work, name: door.name, city: door.city, zone: door.zone, readyMinute: doorMinute };
+}
+
+function routePlaces(
+  { shipDate, origin, hub, weather }: DayQuestion,
+  known: { arrivalDate: string; packedMs: number; city: string; zone: string },
+): RoutePlace[] {
+  const bucket = (forecast: typeof weather.origin) => (forecast ? placeWeather(forecast) : null);
+  const { arrivalDate, packedMs, city, zone } = known;
+  // At either end both the ship day and the arrival day count, each as a whole local day (design 5.5).
+  const days = (of: string) => ({ fromMs: startOfLocalDay(shipDate, of), toMs: startOfLocalDay(addDays(arrivalDate, 1), of) });
+  const night = {
+    fromMs: localInstant(shipDate, hubNight.fromMinute, hub.zone),
+    toMs: localInstant(arrivalDate, hubNight.toMinute, hub.zone),
+  };
+  const leavesMs = localInstant(shipDate, leavesCounterMinute, origin.zone);
+  const arrivalDay = { alertFromMs: startOfLocalDay(arrivalDate, zone), alertToMs: days(zone).toMs };
+  return [
+    { role: 'origin', name: origin.city, zone: origin.zone, weather: bucket(weather.origin), ...days(origin.zone), alertFromMs: packedMs, alertToMs: leavesMs },
+    { role: 'hub', name: hub.city, zone: hub.zone, weather: bucket(weather.hub), ...night, alertFromMs: night.fromMs, alertToMs: night.toMs },
+    { role: 'destination', name: city, zone, weather: bucket(weather.destination), ...days(zone), ...arrivalDay },
+  ];
+}
+
+function outdoorRange(places: readonly RoutePlace[], shipDate: string, arrivalDate: string): RangeF | null {
+  const ranges = places.flatMap((place) => {
+    if (!place.weather) return [];
+    const found =
+      place.role === 'hub'
+        ? [place.weather.window(place.fromMs, place.toMs)]
+        : [place.weather.day(shipDate), place.weather.day(arrivalDate)];
+    return found.filter((range) => range !== null);
+  });
+  if (ranges.length === 0) return null;
+  return { lowF: Math.min(...ranges.map((range) => range.lowF)), highF: Math.max(...ranges.map((range) => range.highF)) };
+}

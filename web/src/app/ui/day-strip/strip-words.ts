@@ -1,0 +1,40 @@
+import type { DayVerdict, Reason, TemperatureUnit } from '@shared/contract';
+import { dayLabel } from '../../core/dates';
+import { rangeText } from '../../core/temperature';
+
+/** Two or three words for a reason's code, for the foot of a column; what is not listed shows no words there. */
+const short: Readonly<Record<string, string>> = {};
+
+/** The reason that decided a verdict: the first of its own class. */
+export const decidingReason = (day: DayVerdict): Reason | null =>
+  day.reasons.find((reason) => reason.verdict === day.verdict) ?? null;
+
+/** Why, in two or three words; empty for an open day and for a reason without short words. */
+export function shortWhy(day: DayVerdict): string {
+  if (day.verdict === 'open') return '';
+  const own = day.reasons.filter((reason) => reason.verdict === day.verdict);
+  return own.map((reason) => short[reason.code]).find((words) => words !== undefined) ?? '';
+}
+
+/** What is left in the run that goes that day: `18 L left`, `full`, or empty without a run. */
+export function roomText(day: DayVerdict): string {
+  if (!day.run) return '';
+  const litres = Math.floor(day.run.roomL);
+  return litres > 0 ? `${litres} L left` : 'full';
+}
+
+/** The numbers of a day in a sentence, for the tooltip and for who cannot see the bars. */
+export function dayNumbers(day: DayVerdict, unit: TemperatureUnit): string {
+  const parts = [
+    day.outdoor ? `Outdoors ${rangeText(day.outdoor, unit)}.` : '',
+    day.inBox ? `In the box ${rangeText(day.inBox, unit)}.` : '',
+    shortWhy(day) ? `${capital(shortWhy(day))}.` : '',
+    day.run ? `A run goes, ${roomText(day)}.` : '',
+  ];
+  return parts.filter(Boolean).join(' ') || 'No forecast for this day yet.';
+}
+
+/** `Tuesday, December 8: open`. */
+export const dayName = (day: DayVerdict): string => `${dayLabel(day.date)}: ${day.verdict}`;
+
+const capital = (text: string): string => text.charAt(0).toUpperCase() + text.slice(1);
