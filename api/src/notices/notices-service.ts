@@ -1,4 +1,19 @@
+import { notFound } from '@shared/errors';
 import type { Deps } from '../deps';
+import { mailWaits } from './mail-wake';
+import { countMails, failedMails, requeueMail } from './outbox-queries';
+import { drainOutbox } from './outbox';
+import {
+  accountLink,
+  buyerSpoke,
+  leftTheRun,
+  parcelBooked,
+  parcelCreated,
+  parcelOff,
+  runCalledOff,
+  runHandedOver,
+  runPlanned,
+} from './tell-event';
 
 /** What happened, in the words of the service it happened in. The notices feature decides whom it concerns and writes the mails. */
 export type NoticeEvent =
@@ -28,6 +43,43 @@ export interface NoticesService {
   resend(id: number): Promise<void>;
 }
 
+/** Who hears of what, and the queue the mails wait in. */
 export function createNoticesService(deps: Deps): NoticesService {
-  throw new Error(`not built yet ${deps.config.PORT}`);
+  const { services, db, clock } = deps;
+  return {
+    async tell(event) {
+      switch (event.kind) {
+        case 'account-link':
+          return accountLink(deps, event);
+        case 'parcel-created':
+          return parcelCreated(deps, await services.parcels.get(event.parcelId));
+        case 'parcel-booked':
+          return parcelBooked(deps, await services.parcels.get(event.parcelId));
+        case 'parcel-on-hold':
+        case 'parcel-cancelled':
+          return parcelOff(deps, await services.parcels.get(event.parcelId), event);
+        case 'run-confirmed':
+          return runPlanned(deps, await services.runs.get(event.runId), null);
+        case 'run-changed': {
+          const run = await services.runs.get(event.runId);
+          await leftTheRun(deps, run, event.removedParcelIds, event.why);
+          return runPlanned(deps, run, event.why);
+        }
+        case 'run-called-off':
+          return runCalledOff(deps, await services.runs.get(event.runId), event);
+        case 'run-handed-over':
+          return runHandedOver(deps, await services.runs.get(event.runId));
+        case 'mornings-said':
+        case 'arrival-reported':
+          return buyerSpoke(deps, await services.parcels.get(event.parcelId), event.kind);
+      }
+    },
+    drain: () => drainOutbox(deps),
+    queue: () => countMails(db),
+    failedMail: () => failedMails(db, 100),
+    async resend(id) {
+      if (!(await requeueMail(db, id, clock.nowIso()))) throw notFound('That failed mail');
+      deps.afterCommit(() => mailWaits(deps.config));
+    },
+  };
 }

@@ -22,6 +22,6 @@ export function addressLimit(
   });
   return (req, res) =>
     new Promise((resolve, reject) => {
-      void middleware(req, res, (error?: Error) => (error ? reject(error) : resolve()));
+      void middleware(req, res, (error?: unknown) => (error instanceof Error ? reject(error) : resolve()));
     });
 }
