@@ -4,6 +4,7 @@ import type { AnyRoute } from './http/route';
 import { parcelsRoutes } from './parcels/parcels-routes';
 import { peopleRoutes } from './people/people-routes';
 import { placesRoutes } from './places/places-routes';
+import { runRoutes } from './runs/runs-routes';
 import { sessionRoutes } from './session/session-routes';
 
 /** Every feature's routes; the router and the OpenAPI document are made from this list. */
@@ -14,5 +15,6 @@ export function allRoutes(deps: Deps): readonly AnyRoute[] {
     ...peopleRoutes(deps),
     ...parcelsRoutes(deps),
     ...arrivalsRoutes(deps),
+    ...runRoutes(deps),
   ];
 }
