@@ -1,6 +1,7 @@
 import { arrivalsRoutes } from './arrivals/arrivals-routes';
 import type { Deps } from './deps';
 import type { AnyRoute } from './http/route';
+import { daysRoutes } from './days/days-routes';
 import { parcelsRoutes } from './parcels/parcels-routes';
 import { peopleRoutes } from './people/people-routes';
 import { placesRoutes } from './places/places-routes';
@@ -16,5 +17,6 @@ export function allRoutes(deps: Deps): readonly AnyRoute[] {
     ...parcelsRoutes(deps),
     ...arrivalsRoutes(deps),
     ...runRoutes(deps),
+    ...daysRoutes(deps),
   ];
 }
