@@ -73,7 +73,7 @@ export function createDaysService(deps: Deps): DaysService {
       const parcel = as ?? (await services.parcels.get(parcelId));
       const [question] = await ask(await readDayWorld(deps, date, 1), [await draftOf(deps, parcel)]);
       if (!question) throw new Error('One question, one answer.');
-      return dayVerdict({ ...question, date });
+      return dayVerdict({ ...question, shipDate: date });
     },
     async routeCheck(actor, body) {
       const origin = await originOf(deps, actor, body);
