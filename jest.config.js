@@ -1,4 +1,4 @@
-/** Two projects: `node` (shared, api, test/api, test/outside, test/migrations) and `web` (Angular units in jsdom). */
+/** Two projects: `node` (shared, api, test/ but for the browser) and `web` (Angular units in jsdom). */
 const swc = [
   '@swc/jest',
   {
@@ -20,7 +20,7 @@ module.exports = {
       roots: ['<rootDir>/shared', '<rootDir>/api', '<rootDir>/test'],
       testMatch: [
         '<rootDir>/{shared,api}/src/**/*.spec.ts',
-        '<rootDir>/test/{api,outside,migrations,tools}/**/*.test.ts',
+        '<rootDir>/test/{api,outside,migrations,seeds,tools}/**/*.test.ts',
       ],
       transform: { '^.+\\.ts$': swc },
       moduleNameMapper,

@@ -1,6 +1,8 @@
 import { randomBytes } from 'node:crypto';
 import { existsSync, mkdirSync, readFileSync, writeFileSync } from 'node:fs';
 import { dirname, join } from 'node:path';
+import { createClock } from '../api/src/clock';
+import { demoWeather } from '../api/src/fakes/forecast/demo-weather';
 
 export type Environment = Record<string, string>;
 
@@ -25,6 +27,7 @@ export function demoEnvironment(env: Environment): Environment {
   const databaseFile = env['DATABASE_FILE'] ?? 'data/dayberth.sqlite';
   const port = env['PORT'] ?? '4300';
   return {
+    ...keptWeather(join(dirname(databaseFile), 'demo-weather.json'), env['DAYBERTH_NOW']),
     ...env,
     DEMO: '1',
     PORT: port,
@@ -43,4 +46,18 @@ function keptSecret(file: string): string {
   const secret = randomBytes(32).toString('base64url');
   writeFileSync(file, `${secret}\n`, { mode: 0o600 });
   return secret;
+}
+
+/** Chosen at the first start and kept beside the database: a later start must not turn the weather round. */
+function keptWeather(file: string, frozenAt: string | undefined): Environment {
+  if (!existsSync(file)) {
+    const { seed, seasonShiftDays } = demoWeather(createClock(frozenAt).nowMs());
+    const chosen = {
+      FORECAST_FAKE_SEED: String(seed),
+      FORECAST_FAKE_SEASON_SHIFT_DAYS: String(seasonShiftDays),
+    };
+    mkdirSync(dirname(file), { recursive: true });
+    writeFileSync(file, `${JSON.stringify(chosen)}\n`);
+  }
+  return JSON.parse(readFileSync(file, 'utf8')) as Environment;
 }

@@ -14,7 +14,6 @@ export async function startFakes(env: Environment, firstPort: number): Promise<F
   const forecast = start('dist/fakes/forecast.mjs', {
     ...env,
     FORECAST_FAKE_PORT: port(0),
-    FORECAST_FAKE_SEED: env['FORECAST_FAKE_SEED'] ?? '1',
   });
   const mail = start('dist/fakes/mail.mjs', {
     ...env,

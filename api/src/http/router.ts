@@ -1,3 +1,4 @@
+import type {} from 'passport';
 import { Router, type RequestHandler } from 'express';
 import type * as z from 'zod';
 import { AppError } from '@shared/errors';

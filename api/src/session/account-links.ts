@@ -31,19 +31,28 @@ const hashOf = (token: string) => createHash('sha256').update(token).digest('hex
 /** Makes a one-time link (an invitation lives 7 days, a reset 1 h) and tells the person; older ones of the kind end. */
 export function sendLink(deps: Deps, personId: number, kind: LinkKind): Promise<void> {
   return deps.transaction(async (tx) => {
-    const token = randomBytes(32).toString('base64url');
-    const expiresAt = new Date(tx.clock.nowMs() + lifeMs[kind]).toISOString();
-    await endOpenLinks(tx, personId, kind);
-    await tx.db('account_links').insert({
-      person_id: personId,
-      kind,
-      token_hash: hashOf(token),
-      created_at: tx.clock.nowIso(),
-      expires_at: expiresAt,
-    });
-    const url = `${tx.config.PUBLIC_URL.replace(/\/$/, '')}/account-link/${token}`;
+    const { url, expiresAt } = await makeLink(tx, personId, kind);
     await tx.services.notices.tell({ kind: 'account-link', personId, link: kind, url, expiresAt });
   });
+}
+
+/** The same without telling anybody: for a first admin, who reads it on the machine itself. In the present transaction. */
+export async function makeLink(
+  tx: Deps,
+  personId: number,
+  kind: LinkKind,
+): Promise<{ url: string; expiresAt: string }> {
+  const token = randomBytes(32).toString('base64url');
+  const expiresAt = new Date(tx.clock.nowMs() + lifeMs[kind]).toISOString();
+  await endOpenLinks(tx, personId, kind);
+  await tx.db('account_links').insert({
+    person_id: personId,
+    kind,
+    token_hash: hashOf(token),
+    created_at: tx.clock.nowIso(),
+    expires_at: expiresAt,
+  });
+  return { url: `${tx.config.PUBLIC_URL.replace(/\/$/, '')}/account-link/${token}`, expiresAt };
 }
 
 /** Sends a reset link when the address has an open account; says nothing about whether it has. */

@@ -10,6 +10,8 @@ export interface ForecastFakeOptions {
   readonly seed: number;
   /** The fake's clock, UTC epoch ms. */
   readonly now: () => number;
+  /** Days by which the season runs ahead of the calendar; 0 by default. */
+  readonly seasonShiftDays?: number;
 }
 
 /** A request as the fake saw it. */
@@ -34,8 +36,8 @@ export interface ForecastFake {
 }
 
 /** A stand-in for the public weather service: the same protocol over a socket, invented weather, a script for tests. */
-export function createForecastFake({ seed, now }: ForecastFakeOptions): ForecastFake {
-  const script = new ForecastScript();
+export function createForecastFake({ seed, now, seasonShiftDays = 0 }: ForecastFakeOptions): ForecastFake {
+  const script = new ForecastScript(seasonShiftDays);
   const log: LoggedRequest[] = [];
   let open = 0;
   let most = 0;

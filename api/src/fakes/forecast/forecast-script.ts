@@ -63,6 +63,8 @@ export class ForecastScript {
   steady: { lowF: number; highF: number } | null = null;
   moves = 0;
   delayMs = 0;
+  /** How far ahead in the year the weather's season is; outlives `reset`. */
+  readonly seasonShiftMs: number;
   /** Rises with every change, so that the fake knows that an answer given before is not current any more. */
   revision = 0;
   private snaps: NonNullable<Change['coldSnap']>[] = [];
@@ -73,6 +75,10 @@ export class ForecastScript {
     left: 0,
     only: undefined,
   };
+
+  constructor(seasonShiftDays = 0) {
+    this.seasonShiftMs = seasonShiftDays * 86_400_000;
+  }
 
   /** Takes over a change; throws a ZodError for one it does not know. */
   apply(input: ScriptChange): void {

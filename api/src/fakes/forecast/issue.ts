@@ -24,7 +24,7 @@ export function issuedF(
   seed: number,
   place: Position,
 ): (atMs: number, issuedMs: number) => number {
-  const weather = weatherAt(seed, place.lat, place.lon);
+  const weather = weatherAt(seed, place.lat, place.lon, script.seasonShiftMs);
   return (atMs, issuedMs) => {
     const tempF = script.steady ? steadyF(script.steady, place.lon, atMs) : weather.forecastF(atMs, issuedMs);
     return tempF + script.deltaF(place, atMs);

@@ -95,7 +95,7 @@ export function eventsAt(
 const middle = (degrees: number) => (Math.floor(degrees / countyDegrees) + 0.5) * countyDegrees;
 
 function derivedEvents(script: ForecastScript, seed: number, seat: Position, nowMs: number): SevereEvent[] {
-  const weather = weatherAt(seed, seat.lat, seat.lon);
+  const weather = weatherAt(seed, seat.lat, seat.lon, script.seasonShiftMs);
   const { issuedMs } = issueTime(nowMs);
   const hours = Array.from({ length: 24 + aheadHours }, (_, index) => {
     const atMs = issuedMs + (index - 24) * hourMs;

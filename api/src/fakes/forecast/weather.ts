@@ -24,9 +24,9 @@ export interface PointWeather {
 /**
  * Weather for a seed and position. Normals of the place and season, a day's curve in local solar time, and fronts:
  * smooth seeded noise in space and time that travels east, three to seven days from cold to cold, strongest inland and
- * in winter. A pure function of seed, position and hour.
+ * in winter. A pure function of seed, position and hour; `seasonShiftMs` takes the normals of another time of the year.
  */
-export function weatherAt(seed: number, lat: number, lon: number): PointWeather {
+export function weatherAt(seed: number, lat: number, lon: number, seasonShiftMs = 0): PointWeather {
   const climate = climateAt(lat, lon);
   const frontAt = (atMs: number) => front(seed, lat, lon, atMs);
   const wetnessAt = (atMs: number) => {
@@ -34,9 +34,11 @@ export function weatherAt(seed: number, lat: number, lon: number): PointWeather 
     return 1.5 * smoothNoise(seed + 77, (lon - eastwardDegreesPerDay * days) / 7, lat / 5, days / 2);
   };
   const trueF = (atMs: number) => {
-    const winter = winterness(atMs);
+    const winter = winterness(atMs + seasonShiftMs);
     const swing = winter * climate.winterSwingF + (1 - winter) * climate.summerSwingF;
-    return clamp(seasonF(climate, lon, atMs, 1 - 0.25 * wetnessAt(atMs)) + swing * frontAt(atMs));
+    return clamp(
+      seasonF(climate, lon, atMs, 1 - 0.25 * wetnessAt(atMs), seasonShiftMs) + swing * frontAt(atMs),
+    );
   };
   const forecastF = (atMs: number, issuedMs: number) =>
     clamp(trueF(atMs) + leadErrorF(seed, lat, lon, atMs, issuedMs) * (climate.winterSwingF / 9));
@@ -46,9 +48,15 @@ export function weatherAt(seed: number, lat: number, lon: number): PointWeather 
 const clamp = (tempF: number) => Math.max(coldestF, Math.min(hottestF, tempF));
 
 /** The day's curve between the normal low (06:00) and high (15:00 solar time); clouds flatten it by `openness`. */
-function seasonF(climate: Climate, lon: number, atMs: number, openness: number): number {
-  const high = monthly(climate.highsF, atMs);
-  const low = monthly(climate.lowsF, atMs);
+function seasonF(
+  climate: Climate,
+  lon: number,
+  atMs: number,
+  openness: number,
+  seasonShiftMs: number,
+): number {
+  const high = monthly(climate.highsF, atMs + seasonShiftMs);
+  const low = monthly(climate.lowsF, atMs + seasonShiftMs);
   const solarHour = (((atMs / 3_600_000 + lon / 15) % 24) + 24) % 24;
   const sinceLow = (solarHour - 6 + 24) % 24;
   const rising = sinceLow <= 9;
