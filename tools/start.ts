@@ -11,8 +11,8 @@ async function main(): Promise<void> {
   let fakes: Fakes | null = null;
   if (isDemo(env)) {
     env = demoEnvironment(env);
-    const port = Number(env['PORT']);
-    fakes = await startFakes(env, port === 0 ? 0 : port + 1);
+    // Next to the site's own port, so that other commands find them; 0 takes free ones.
+    fakes = await startFakes(env, Number(env['FAKES_PORT'] ?? Number(env['PORT']) + 1));
     env = {
       ...env,
       FORECAST_URL: fakes.forecastUrl,
@@ -32,6 +32,7 @@ async function main(): Promise<void> {
   if (fakes) {
     say(`Open ${env['PUBLIC_URL']}/demo for the demo accounts.`);
     say(`The demo mailbox is at ${fakes.mailboxUrl}`);
+    say(`Its forecasts come from ${fakes.forecastUrl}`);
   }
 }
 
