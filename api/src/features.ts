@@ -1,6 +1,7 @@
 import { arrivalsRoutes } from './arrivals/arrivals-routes';
 import type { Deps } from './deps';
 import type { AnyRoute } from './http/route';
+import { blackoutsRoutes } from './blackouts/blackouts-routes';
 import { daysRoutes } from './days/days-routes';
 import { parcelsRoutes } from './parcels/parcels-routes';
 import { peopleRoutes } from './people/people-routes';
@@ -18,5 +19,6 @@ export function allRoutes(deps: Deps): readonly AnyRoute[] {
     ...arrivalsRoutes(deps),
     ...runRoutes(deps),
     ...daysRoutes(deps),
+    ...blackoutsRoutes(deps),
   ];
 }

@@ -1,0 +1,46 @@
+import { blackoutNew } from '@shared/contract';
+import { ruleLines } from '@shared/calendar/blackout-dates';
+import { yearlyRuleEverFalls, yearlyRuleProblem } from '@shared/calendar/yearly-rule';
+import { badInput, type FieldProblem } from '@shared/errors';
+import type { Deps } from '../deps';
+import { inputError } from '../http/problem';
+import type { BlackoutFields } from './blackouts-queries';
+
+/**
+ * A blackout as it may be stored: consistent as a whole, its rules understood, what it names existing, and only its own
+ * scope's member set. Throws 400 field by field.
+ */
+export async function checkedBlackout(
+  { services }: Deps,
+  fields: BlackoutFields,
+  today: string,
+): Promise<BlackoutFields> {
+  const parsed = blackoutNew.safeParse(fields);
+  if (!parsed.success) throw inputError(parsed.error);
+  const errors: FieldProblem[] = [];
+  const { scope, kind, rules, startDate } = parsed.data;
+  if (kind === 'yearly') {
+    const problem = ruleLines(rules)
+      .map((rule) => yearlyRuleProblem(rule, startDate))
+      .find((text) => text !== null);
+    if (problem) errors.push({ path: 'rules', message: problem });
+    else if (!ruleLines(rules).some((rule) => yearlyRuleEverFalls(rule, today, startDate)))
+      errors.push({ path: 'rules', message: 'That day never comes in the next ten years.' });
+  }
+  const missing = (list: readonly { id: number }[], id: number | null) => !list.some((one) => one.id === id);
+  if (scope === 'carrier' && missing(await services.places.carriers(), parsed.data.carrierId))
+    errors.push({ path: 'carrierId', message: 'That carrier was not found.' });
+  if (scope === 'counter' && missing(await services.places.counters(), parsed.data.counterId))
+    errors.push({ path: 'counterId', message: 'That counter was not found.' });
+  if (errors.length > 0) throw badInput(errors);
+  const { data } = parsed;
+  return {
+    ...data,
+    endDate: kind === 'date' ? null : data.endDate,
+    rules: kind === 'yearly' ? rules : null,
+    liftedDates: [...new Set(data.liftedDates)].sort(),
+    carrierId: scope === 'carrier' ? data.carrierId : null,
+    state: scope === 'state' ? data.state : null,
+    counterId: scope === 'counter' ? data.counterId : null,
+  };
+}
