@@ -22,7 +22,11 @@ export async function buildServer(): Promise<void> {
     target: 'node20',
     format: 'esm',
     packages: 'external',
-    alias: { '@shared': resolve('shared/src') },
+    alias: {
+      '@shared': resolve('shared/src'),
+      // Its entry for Node is CommonJS whose names an ES module cannot see; a path is bundled instead.
+      rrule: resolve('node_modules/rrule/dist/esm/index.js'),
+    },
     sourcemap: true,
     logLevel: 'warning',
   });
