@@ -1,6 +1,7 @@
 import * as z from 'zod';
 import {
   availability,
+  breederSummary,
   coordinatorSummary,
   idParams,
   mePatch,
@@ -71,6 +72,14 @@ function adminRoutes({ services: { people } }: Deps): AnyRoute[] {
       allow: ['coordinator', 'admin'],
       response: z.array(coordinatorSummary),
       handler: () => people.coordinators(),
+    }),
+    route({
+      method: 'get',
+      path: '/breeders',
+      summary: 'For whom a parcel can be entered',
+      allow: ['coordinator', 'admin'],
+      response: z.array(breederSummary),
+      handler: () => people.breeders(),
     }),
   ];
 }

@@ -1,6 +1,7 @@
 import type * as z from 'zod';
 import type {
   Availability,
+  BreederSummary,
   CoordinatorSummary,
   mePatch,
   Person,
@@ -38,6 +39,7 @@ export interface PeopleService {
   /** Sends a fresh invitation link; older ones end. */
   invite(actor: Actor, id: number): Promise<void>;
   coordinators(): Promise<CoordinatorSummary[]>;
+  breeders(): Promise<BreederSummary[]>;
 }
 
 /** People, their roles, profiles and days. */
@@ -170,6 +172,11 @@ export function createPeopleService(deps: Deps): PeopleService {
         coordinator
           ? [{ id, name, capacityL: coordinator.capacityL, freeWeekdays: coordinator.freeWeekdays }]
           : [],
+      ),
+
+    breeders: async () =>
+      (await withRole('breeder')).flatMap(({ id, name, businessName, breeder }) =>
+        breeder ? [{ id, name, businessName, dropOffCounterId: breeder.dropOffCounterId }] : [],
       ),
   };
 }

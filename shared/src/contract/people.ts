@@ -36,8 +36,22 @@ export const coordinatorProfile = z.object({
 export type CoordinatorProfile = z.infer<typeof coordinatorProfile>;
 
 /** `GET /api/coordinators`: whom a run can be given to. */
-export const coordinatorSummary = z.object({ id, name: z.string(), capacityL: z.number(), freeWeekdays: z.array(weekday) });
+export const coordinatorSummary = z.object({
+  id,
+  name: z.string(),
+  capacityL: z.number(),
+  freeWeekdays: z.array(weekday),
+});
 export type CoordinatorSummary = z.infer<typeof coordinatorSummary>;
+
+/** `GET /api/breeders`: for whom a coordinator or admin can enter a parcel, and where theirs are dropped off. */
+export const breederSummary = z.object({
+  id,
+  name: z.string(),
+  businessName: z.string().nullable(),
+  dropOffCounterId: id,
+});
+export type BreederSummary = z.infer<typeof breederSummary>;
 
 export const daysAway = z
   .object({ from: plainDate, to: plainDate, note: prose(200).default('') })
