@@ -23,9 +23,9 @@ export async function seedFirstAdmin(
     if (!(await tx.db('blackouts').first('id'))) await seedHolidays(tx.db, now);
     if (carrier && hub) {
       const { city, state, lat, lon, zone } = hub;
-      const [hubId] = (await tx
+      const [hubId] = await tx
         .db('hubs')
-        .insert({ name: `${carrier.name} sort hub`, city, state, lat, lon, zone })) as number[];
+        .insert({ name: `${carrier.name} sort hub`, city, state, lat, lon, zone });
       await tx.db('carriers').insert({ name: carrier.name, hub_id: hubId });
     }
     const { policy } = await tx.services.policy.current();

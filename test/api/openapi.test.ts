@@ -11,7 +11,9 @@ function validate(document: unknown): { valid: boolean; errors?: unknown } {
     import { readFileSync } from 'node:fs';
     const result = await new Validator().validate(JSON.parse(readFileSync(0, 'utf8')));
     process.stdout.write(JSON.stringify(result));`;
-  const output = execFileSync(process.execPath, ['--input-type=module', '-e', script], { input: JSON.stringify(document) });
+  const output = execFileSync(process.execPath, ['--input-type=module', '-e', script], {
+    input: JSON.stringify(document),
+  });
   return JSON.parse(output.toString()) as { valid: boolean; errors?: unknown };
 }
 

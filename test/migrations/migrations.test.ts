@@ -6,9 +6,9 @@ import { seedSmallCircle } from '../support/small-circle';
 
 const tablesOf = async (db: Knex) =>
   (
-    (await db.raw(
+    await db.raw<{ name: string }[]>(
       "select name from sqlite_master where type = 'table' and name not like 'sqlite_%' and name not like 'knex_%'",
-    )) as { name: string }[]
+    )
   )
     .map((row) => row.name)
     .sort();

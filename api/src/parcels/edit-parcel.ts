@@ -85,10 +85,15 @@ export async function editParcel(
   });
 }
 
+/** The facts a patch brings, without what is no fact of the parcel. */
+function factsIn(patch: Patch): Partial<ParcelFacts> {
+  const known = Object.entries(patch).filter(([name]) => name !== 'state' && name !== 'trackingNumber');
+  return Object.fromEntries(known);
+}
+
 async function heldAgainst(deps: Deps, before: Parcel, patch: Patch): Promise<Edit> {
   const stored = factsOf(before);
-  const { state: _state, trackingNumber: _number, ...given } = patch;
-  const merged: ParcelFacts = { ...stored, ...given };
+  const merged: ParcelFacts = { ...stored, ...factsIn(patch) };
   const facts = {
     ...merged,
     holdCounterId: merged.service === 'hold' ? merged.holdCounterId : null,

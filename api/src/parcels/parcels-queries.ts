@@ -123,7 +123,7 @@ async function partsOf(db: Knex, ids: readonly number[]): Promise<ParcelParts> {
   const verdicts: VerdictRow[] = [];
   for (const some of chunks(ids)) {
     contents.push(
-      ...((await db('parcel_contents as pc')
+      ...(await db<unknown, ContentRow[]>('parcel_contents as pc')
         .join('species as s', 's.id', 'pc.species_id')
         .whereIn('pc.parcel_id', some)
         .orderBy('pc.id')
@@ -134,14 +134,14 @@ async function partsOf(db: Knex, ids: readonly number[]): Promise<ParcelParts> {
           'pc.mass_g',
           's.common_name',
           's.scientific_name',
-        )) as ContentRow[]),
+        )),
     );
     mornings.push(...(await db<MorningRow>('parcel_mornings').whereIn('parcel_id', some).orderBy('date')));
     const newest = db('booking_verdicts').max('id').whereIn('parcel_id', some).groupBy('parcel_id');
     verdicts.push(
-      ...((await db('booking_verdicts')
+      ...(await db<unknown, VerdictRow[]>('booking_verdicts')
         .whereIn('id', newest)
-        .select('parcel_id', 'ship_date', 'verdict')) as VerdictRow[]),
+        .select('parcel_id', 'ship_date', 'verdict')),
     );
   }
   return { contents: byParcel(contents), mornings: byParcel(mornings), verdicts: byParcel(verdicts) };

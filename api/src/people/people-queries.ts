@@ -136,7 +136,7 @@ export async function findIdByEmail(db: Knex, email: string): Promise<number | n
 }
 
 export async function insertPerson(db: Knex, person: PersonFields, at: string): Promise<number> {
-  const [id] = (await db('people').insert({ ...toRow(person), created_at: at, updated_at: at })) as number[];
+  const [id] = await db('people').insert({ ...toRow(person), created_at: at, updated_at: at });
   return id ?? 0;
 }
 
