@@ -123,11 +123,11 @@ async function partsOf(db: Knex, ids: readonly number[]): Promise<ParcelParts> {
   const verdicts: VerdictRow[] = [];
   for (const some of chunks(ids)) {
     contents.push(
-      ...(await db<unknown, ContentRow[]>('parcel_contents as pc')
+      ...(await db('parcel_contents as pc')
         .join('species as s', 's.id', 'pc.species_id')
         .whereIn('pc.parcel_id', some)
         .orderBy('pc.id')
-        .select(
+        .select<ContentRow[]>(
           'pc.parcel_id',
           'pc.species_id',
           'pc.quantity',
@@ -139,9 +139,9 @@ async function partsOf(db: Knex, ids: readonly number[]): Promise<ParcelParts> {
     mornings.push(...(await db<MorningRow>('parcel_mornings').whereIn('parcel_id', some).orderBy('date')));
     const newest = db('booking_verdicts').max('id').whereIn('parcel_id', some).groupBy('parcel_id');
     verdicts.push(
-      ...(await db<unknown, VerdictRow[]>('booking_verdicts')
+      ...(await db('booking_verdicts')
         .whereIn('id', newest)
-        .select('parcel_id', 'ship_date', 'verdict')),
+        .select<VerdictRow[]>('parcel_id', 'ship_date', 'verdict')),
     );
   }
   return { contents: byParcel(contents), mornings: byParcel(mornings), verdicts: byParcel(verdicts) };
