@@ -48,7 +48,7 @@ describe('the first admin of a real circle', () => {
         .set('X-XSRF-TOKEN', form)
         .send({ password: 'slow tortoise lane' });
     expect((await use()).status).toBeLessThan(300);
-    expect((await use()).status).toBe(404);
+    expect((await use()).status).toBe(410);
   });
 
   it('brings the federal holidays, and the carrier with its sort hub by ZIP when it is named', async () => {
