@@ -40,6 +40,7 @@ export async function createTestSite(options: TestSiteOptions = {}): Promise<Tes
     FORECAST_URL: 'http://127.0.0.1:9',
     FORECAST_USER_AGENT: '(dayberth tests, admin@example.org)',
     LOG_LEVEL: 'silent',
+    POOLING_WORKER_FILE: process.env.POOLING_WORKER_FILE,
     ...options.env,
   });
   const clock: Clock = {
