@@ -5,6 +5,7 @@ import express, { type Express, type RequestHandler } from 'express';
 import helmet from 'helmet';
 import { pinoHttp } from 'pino-http';
 import { AppError } from '@shared/errors';
+import { appVersion } from './app-version';
 import type { Deps } from './deps';
 import { allRoutes } from './features';
 import { formToken } from './http/form-token';
@@ -12,8 +13,6 @@ import { openApi } from './http/openapi';
 import { problemMiddleware } from './http/problem';
 import { createRouter } from './http/router';
 import { sessionMiddleware } from './session/session-middleware';
-
-export const appVersion = '0.1.0';
 
 export interface AppOptions {
   /** Folder of the built pages (with index.html); left out in API tests. */

@@ -1,5 +1,6 @@
 import { arrivalsRoutes } from './arrivals/arrivals-routes';
 import type { Deps } from './deps';
+import { deskRoutes } from './desk/desk-routes';
 import type { AnyRoute } from './http/route';
 import { blackoutsRoutes } from './blackouts/blackouts-routes';
 import { daysRoutes } from './days/days-routes';
@@ -20,5 +21,6 @@ export function allRoutes(deps: Deps): readonly AnyRoute[] {
     ...runRoutes(deps),
     ...daysRoutes(deps),
     ...blackoutsRoutes(deps),
+    ...deskRoutes(deps),
   ];
 }

@@ -2,6 +2,7 @@ import { createArrivalsService, type ArrivalsService } from './arrivals/arrivals
 import { createBlackoutsService, type BlackoutsService } from './blackouts/blackouts-service';
 import { createDaysService, type DaysService } from './days/days-service';
 import type { Deps } from './deps';
+import { createDeskService, type DeskService } from './desk/desk-service';
 import { createForecastsService, type ForecastsService } from './forecasts/forecasts-service';
 import { createHistoryService, type HistoryService } from './history/history-service';
 import { createNoticesService, type NoticesService } from './notices/notices-service';
@@ -18,6 +19,7 @@ export interface Services {
   readonly arrivals: ArrivalsService;
   readonly blackouts: BlackoutsService;
   readonly days: DaysService;
+  readonly desk: DeskService;
   readonly forecasts: ForecastsService;
   readonly history: HistoryService;
   readonly notices: NoticesService;
@@ -34,6 +36,7 @@ const makers: { readonly [K in keyof Services]: (deps: Deps) => Services[K] } = 
   arrivals: createArrivalsService,
   blackouts: createBlackoutsService,
   days: createDaysService,
+  desk: createDeskService,
   forecasts: createForecastsService,
   history: createHistoryService,
   notices: createNoticesService,

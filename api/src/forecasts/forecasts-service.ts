@@ -10,6 +10,7 @@ import { listStates, readForecasts, writeForecast, type CacheState } from './for
 import { refreshPlace } from './refresh-place';
 
 export interface ForecastStatus {
+  readonly placeKey: string;
   readonly place: string;
   readonly issuedAt: string | null;
   readonly fetchedAt: string | null;
@@ -61,6 +62,7 @@ export function createForecastsService(deps: Deps): ForecastsService {
     async status() {
       const [states, names] = await Promise.all([listStates(db), placeNames(deps)]);
       return states.map(({ placeKey: key, issuedAt, fetchedAt, problem }) => ({
+        placeKey: key,
         place: names.get(key) ?? key,
         issuedAt,
         fetchedAt,
