@@ -1,4 +1,4 @@
-import { ComponentHarness, TestKey } from '@angular/cdk/testing';
+import { ComponentHarness, type TestKey } from '@angular/cdk/testing';
 
 /** Drives a `<db-day-strip>` the way a person does, by days and keys. */
 export class DayStripHarness extends ComponentHarness {
@@ -6,6 +6,7 @@ export class DayStripHarness extends ComponentHarness {
 
   private readonly radios = this.locatorForAll('[role=radio]');
   private readonly toggle = this.locatorFor('.under button');
+  private readonly legendNote = this.locatorFor('.legend');
   private readonly tableRows = this.locatorForAll('tbody tr');
 
   /** The accessible names of all days, in order. */
@@ -44,6 +45,11 @@ export class DayStripHarness extends ComponentHarness {
   async table(): Promise<string[]> {
     const rows = await this.tableRows();
     return Promise.all(rows.map((row) => row.text()));
+  }
+
+  /** What the picture's signs mean. */
+  async legend(): Promise<string> {
+    return (await this.legendNote()).text();
   }
 
   private async radio(index: number) {

@@ -1,4 +1,4 @@
-import { HarnessLoader, TestKey } from '@angular/cdk/testing';
+import { type HarnessLoader, TestKey } from '@angular/cdk/testing';
 import { TestbedHarnessEnvironment } from '@angular/cdk/testing/testbed';
 import { ChangeDetectionStrategy, Component, signal } from '@angular/core';
 import { TestBed } from '@angular/core/testing';
@@ -37,8 +37,14 @@ const dayOf = (date: string, verdict: Verdict, rest: Partial<DayVerdict> = {}): 
 })
 class Page {
   readonly days = [
-    dayOf('2026-12-07', 'shut', { outdoor: null }),
-    dayOf('2026-12-08', 'open', { run: { id: 3, state: 'confirmed', roomL: 18.7 } }),
+    dayOf('2026-12-07', 'shut', {
+      outdoor: null,
+      reasons: [{ code: 'origin-closed', verdict: 'shut', text: '', values: {} }],
+    }),
+    dayOf('2026-12-08', 'open', {
+      run: { id: 3, state: 'confirmed', roomL: 18.7 },
+      reasons: [{ code: 'slack', verdict: 'open', text: '', values: {} }],
+    }),
     dayOf('2026-12-09', 'tight'),
     dayOf('2026-12-10', 'far', { outdoor: null }),
   ];
@@ -101,5 +107,16 @@ describe('the day strip', () => {
     expect(rows[1]).toContain('6 to 14 °C');
     expect(rows[1]).toContain('18 L left');
     expect(rows[0]).toContain('–');
+  });
+
+  it('is silent about the box until somebody has worked it out', async () => {
+    expect(await strip.legend()).not.toContain('inside the box');
+  });
+
+  it('says in two words why a day is shut, and nothing more of an open one', async () => {
+    await strip.toggleTable();
+    const rows = await strip.table();
+    expect(rows[0]).toContain('no drop-off');
+    expect(rows[1]).not.toContain('slack');
   });
 });

@@ -49,16 +49,22 @@ export class DayStrip {
   private readonly width = signal(1040);
   private readonly stop = signal<string | null>(null);
   private readonly buttons = viewChildren<ElementRef<HTMLButtonElement>>('day');
+  /** A far day's weather is at best known in part; half a range would look like a whole one. */
+  private readonly drawn = computed(() =>
+    this.days().map((day) => (day.verdict === 'far' ? { ...day, outdoor: null, inBox: null } : day)),
+  );
   protected readonly isTable = signal(false);
   protected readonly isNarrow = computed(() => this.width() < narrowBelow);
   protected readonly wide = computed(() =>
-    stripGeometry(this.days(), this.band(), this.unit(), { ...frame, width: this.width() }),
+    stripGeometry(this.drawn(), this.band(), this.unit(), { ...frame, width: this.width() }),
   );
-  protected readonly rows = computed(() => rowGeometry(this.days(), this.band(), this.unit()));
+  protected readonly rows = computed(() => rowGeometry(this.drawn(), this.band(), this.unit()));
   protected readonly bandText = computed(() => {
     const band = this.band();
     return band ? rangeText(band, this.unit()) : null;
   });
+  /** Nobody has worked out the inside of the box yet: no bar, no column, no word of it. */
+  protected readonly hasInBox = computed(() => this.days().some((day) => day.inBox !== null));
   protected readonly items = computed(() => this.days().map((day, index) => this.itemOf(day, index)));
   /** The one day that Tab reaches: where the arrows went, else the chosen one, else the first that can be booked. */
   protected readonly tabStop = computed(() => {
@@ -66,7 +72,7 @@ export class DayStrip {
     const wanted = [this.stop(), this.chosen(), days.find((day) => day.verdict !== 'shut')?.date];
     return wanted.find((date) => date != null && days.some((day) => day.date === date)) ?? days[0]?.date;
   });
-  protected readonly view = computed(() => ({ width: this.width(), height: 372 }));
+  protected readonly view = computed(() => ({ width: this.width(), height: 350 }));
 
   constructor() {
     const destroyed = inject(DestroyRef);
@@ -117,7 +123,7 @@ export class DayStrip {
       why,
       lines: wrapWords(why, characters),
       room: roomText(day),
-      outdoor: day.outdoor ? rangeText(day.outdoor, this.unit()) : '–',
+      outdoor: day.outdoor && day.verdict !== 'far' ? rangeText(day.outdoor, this.unit()) : '–',
       inBox: day.inBox ? rangeText(day.inBox, this.unit()) : '–',
     };
   }

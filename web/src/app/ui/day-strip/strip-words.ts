@@ -3,7 +3,29 @@ import { dayLabel } from '../../core/dates';
 import { rangeText } from '../../core/temperature';
 
 /** Two or three words for a reason's code, for the foot of a column; what is not listed shows no words there. */
-const short: Readonly<Record<string, string>> = {};
+const short: Readonly<Record<string, string>> = {
+  past: 'over',
+  'beyond-offer': 'too far ahead',
+  'origin-closed': 'no drop-off',
+  'cut-off-passed': 'cut-off passed',
+  'arrival-closed': 'no arrival',
+  'no-slack': 'no slack day',
+  'not-ready': 'not ready',
+  'too-late': 'too late',
+  'fed-lately': 'fed lately',
+  'breeder-away': 'breeder away',
+  'buyer-away': 'buyer away',
+  'buyer-not-said': 'not a named morning',
+  'too-cold': 'too cold',
+  'too-hot': 'too hot',
+  'near-cold': 'near the cold limit',
+  'near-hot': 'near the hot limit',
+  alert: 'weather alert',
+  'alerts-unknown': 'alerts unknown',
+  'no-forecast': 'no forecast',
+  'forecast-old': 'old forecast',
+  'pack-short': 'pack too short',
+};
 
 /** The reason that decided a verdict: the first of its own class. */
 export const decidingReason = (day: DayVerdict): Reason | null =>
@@ -26,8 +48,8 @@ export function roomText(day: DayVerdict): string {
 /** The numbers of a day in a sentence, for the tooltip and for who cannot see the bars. */
 export function dayNumbers(day: DayVerdict, unit: TemperatureUnit): string {
   const parts = [
-    day.outdoor ? `Outdoors ${rangeText(day.outdoor, unit)}.` : '',
-    day.inBox ? `In the box ${rangeText(day.inBox, unit)}.` : '',
+    day.outdoor && day.verdict !== 'far' ? `Outdoors ${rangeText(day.outdoor, unit)}.` : '',
+    day.inBox && day.verdict !== 'far' ? `In the box ${rangeText(day.inBox, unit)}.` : '',
     shortWhy(day) ? `${capital(shortWhy(day))}.` : '',
     day.run ? `A run goes, ${roomText(day)}.` : '',
   ];

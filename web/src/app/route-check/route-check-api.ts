@@ -1,0 +1,18 @@
+import { HttpClient } from '@angular/common/http';
+import { inject, Injectable } from '@angular/core';
+import type { Observable } from 'rxjs';
+import type { DaysAnswer, Person, RouteCheck } from '@shared/contract';
+
+/** The question without a parcel. */
+@Injectable({ providedIn: 'root' })
+export class RouteCheckApi {
+  private readonly http = inject(HttpClient);
+
+  ask(question: RouteCheck): Observable<DaysAnswer> {
+    return this.http.post<DaysAnswer>('/api/route-checks', question);
+  }
+
+  me(): Observable<Person> {
+    return this.http.get<Person>('/api/me');
+  }
+}
