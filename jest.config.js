@@ -16,6 +16,8 @@ module.exports = {
     {
       displayName: 'node',
       testEnvironment: 'node',
+      globalSetup: '<rootDir>/test/support/build-worker.ts',
+      globalTeardown: '<rootDir>/test/support/remove-worker.ts',
       rootDir: __dirname,
       roots: ['<rootDir>/shared', '<rootDir>/api', '<rootDir>/test'],
       testMatch: [

@@ -43,6 +43,8 @@ const schema = z
     DEMO_MAILBOX_URL: url('an address').optional(),
     /** Freezes the clock at an ISO instant, for tests and demos. */
     DAYBERTH_NOW: z.iso.datetime({ offset: true, message: 'must be an ISO instant' }).optional(),
+    /** The bundle of the worker thread that pools; tests build their own. */
+    POOLING_WORKER_FILE: z.string().min(1).default('dist/api/pooling-worker.mjs'),
     LOG_LEVEL: z.enum(['fatal', 'error', 'warn', 'info', 'debug', 'silent']).default('info'),
   })
   .superRefine((env, ctx) => {

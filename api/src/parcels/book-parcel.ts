@@ -81,6 +81,8 @@ async function bookDay(deps: Deps, actor: Actor, parcel: Parcel, body: DayBody):
       const columns = { ship_date: body.date, flexible_from: null, flexible_to: null, accepted_tight: words };
       await saveMove(tx, await rowOf(tx, parcel.id), columns, actor, text, verdict);
     }
+    // Its run may have waited for just this.
+    await tx.services.runs.lookAgain(parcel.id);
     if (now.state !== 'booked' || now.shipDate !== body.date)
       await tx.services.notices.tell({ kind: 'parcel-booked', parcelId: parcel.id });
     return tx.services.parcels.get(parcel.id);

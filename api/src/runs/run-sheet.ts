@@ -1,11 +1,13 @@
 import type { Counter, Parcel, Person } from '@shared/contract';
+import { addDays } from '@shared/calendar/add-days';
 import { localInstant } from '@shared/calendar/local-instant';
 import { cutOffInstant } from '@shared/calendar/cut-off-instant';
 import { splitCost } from '@shared/money/split-cost';
 import { aloneTrip } from '@shared/pooling/cost';
 import { createRunPricer, type PricedRun, type RunPricer } from '@shared/pooling/run-pricer';
 import { timeline, type Timeline } from '@shared/pooling/timeline';
-import type { PoolProblem, Slot } from '@shared/pooling/problem';
+import { mostStops, type PoolProblem, type Slot } from '@shared/pooling/problem';
+import { runProblems, type RunFacts } from './run-problems';
 import { oneRunProblem, type RunWorld } from './run-world';
 
 /** Everything about a run that follows from its day, driver, counter and parcels. */
@@ -20,7 +22,14 @@ export interface RunSheet {
   readonly drivingCents: number;
   readonly aloneCents: number;
   readonly problems: readonly string[];
-  readonly stops: readonly { breederId: number; arriveAt: string; leaveAt: string; waitMinutes: number; driveMinutes: number; miles: number }[];
+  readonly stops: readonly {
+    breederId: number;
+    arriveAt: string;
+    leaveAt: string;
+    waitMinutes: number;
+    driveMinutes: number;
+    miles: number;
+  }[];
   readonly shares: ReadonlyMap<number, number>;
 }
 
@@ -31,16 +40,24 @@ export interface RunFrame {
 }
 
 /** Works a run out: best order, clock, cost, shares, and in plain sentences what is wrong with it. */
-export function runSheet(world: RunWorld, frame: RunFrame, parcels: readonly Parcel[]): RunSheet {
+export function runSheet(
+  world: RunWorld,
+  frame: RunFrame,
+  parcels: readonly Parcel[],
+  facts: RunFacts,
+): RunSheet {
   const { coordinator, counter, date } = frame;
-  const problem = oneRunProblem(world, coordinator, counter, date, parcels);
+  const inTime = oneRunProblem(world, coordinator, counter, date, parcels, facts.earliestMinute);
+  const isTooLate = facts.earliestMinute !== null && !canBeDriven(inTime, frame);
+  // Too late for today: shown as it would have gone, with the problem beside it.
+  const problem = isTooLate ? { ...inTime, earliestMinutes: {} } : inTime;
   const slot: Slot = { coordinatorId: coordinator.id, date, counterId: counter.id };
   const ids = problem.breeders.map(({ id }) => id).sort((a, b) => a - b);
   const pricer = createRunPricer(problem);
   const exact = ids.length > 0 && problem.coordinators.length > 0 ? pricer.price(slot, ids) : null;
   const priced = exact ?? relaxed(pricer, slot, ids, problem);
   const clock = priced ? drive(problem, priced) : null;
-  const at = (minute: number) => new Date(localInstant(date, 0, world.zone) + minute * 60_000).toISOString();
+  const at = (minute: number) => new Date(instantOf(date, minute, world.zone)).toISOString();
   const cutOffMs = cutOffInstant(counter, date) ?? localInstant(date, 0, world.zone);
   const fixedCents = ids.length > 0 ? world.costs.runFixedCents : 0;
   const drivingCents = priced?.drivingCents ?? 0;
@@ -54,7 +71,12 @@ export function runSheet(world: RunWorld, frame: RunFrame, parcels: readonly Par
     fixedCents,
     drivingCents,
     aloneCents: aloneCents(world, problem),
-    problems: problemsOf(problem, frame, parcels, exact !== null),
+    problems: runProblems(
+      { ...facts, isDriven: exact !== null, isTooLate: isTooLate && exact !== null },
+      problem,
+      frame,
+      parcels,
+    ),
     stops: (clock?.stops ?? []).map((stop) => ({
       breederId: stop.breederId,
       arriveAt: at(stop.arriveMinute),
@@ -67,8 +89,28 @@ export function runSheet(world: RunWorld, frame: RunFrame, parcels: readonly Par
   };
 }
 
-function relaxed(pricer: RunPricer, slot: Slot, ids: readonly number[], problem: PoolProblem): PricedRun | null {
-  return ids.length > 0 && problem.coordinators.length > 0 && ids.length <= 12 ? pricer.relaxed(slot, ids) : null;
+/** Minutes on the clock's face; a long drive may begin the evening before. */
+function instantOf(date: string, minute: number, zone: string): number {
+  const days = Math.floor(minute / 1440);
+  return localInstant(addDays(date, days), minute - days * 1440, zone);
+}
+
+function canBeDriven(problem: PoolProblem, { coordinator, counter, date }: RunFrame): boolean {
+  const ids = problem.breeders.map(({ id }) => id);
+  if (ids.length === 0 || problem.coordinators.length === 0) return false;
+  const slot: Slot = { coordinatorId: coordinator.id, date, counterId: counter.id };
+  return createRunPricer(problem).price(slot, ids) !== null;
+}
+
+function relaxed(
+  pricer: RunPricer,
+  slot: Slot,
+  ids: readonly number[],
+  problem: PoolProblem,
+): PricedRun | null {
+  return ids.length > 0 && problem.coordinators.length > 0 && ids.length <= mostStops
+    ? pricer.relaxed(slot, ids)
+    : null;
 }
 
 function drive(problem: PoolProblem, priced: PricedRun): Timeline | null {
@@ -83,12 +125,22 @@ function aloneCents(world: RunWorld, problem: PoolProblem): number {
   const [counter] = problem.counters;
   if (!counter) return 0;
   const perMile = world.policy.pooling.aloneCentsPerMile;
-  return problem.breeders.reduce((sum, breeder) => sum + aloneTrip(breeder, counter, problem.costs, perMile).cents, 0);
+  return problem.breeders.reduce(
+    (sum, breeder) => sum + aloneTrip(breeder, counter, problem.costs, perMile).cents,
+    0,
+  );
 }
 
 /** A set of breeders alone is priced without the windows when it cannot be driven with them: shares need every subset. */
-function shares(pricer: RunPricer, slot: Slot, problem: PoolProblem, ids: readonly number[], fixedCents: number, drivingCents: number): ReadonlyMap<number, number> {
-  if (ids.length === 0 || ids.length > 12 || problem.coordinators.length === 0) return new Map();
+function shares(
+  pricer: RunPricer,
+  slot: Slot,
+  problem: PoolProblem,
+  ids: readonly number[],
+  fixedCents: number,
+  drivingCents: number,
+): ReadonlyMap<number, number> {
+  if (ids.length === 0 || ids.length > mostStops || problem.coordinators.length === 0) return new Map();
   const sharers = problem.parcels.map((parcel) => ({ parcelId: parcel.id, breederId: parcel.breederId }));
   const all = (1 << ids.length) - 1;
   return splitCost(sharers, { fixedCents, drivingCents }, (mask) => {
@@ -96,23 +148,4 @@ function shares(pricer: RunPricer, slot: Slot, problem: PoolProblem, ids: readon
     const some = ids.filter((_, index) => mask & (1 << index));
     return (pricer.price(slot, some) ?? pricer.relaxed(slot, some)).drivingCents;
   });
-}
-
-function problemsOf(problem: PoolProblem, frame: RunFrame, parcels: readonly Parcel[], canBeDriven: boolean): string[] {
-  const { coordinator, counter } = frame;
-  if (parcels.length === 0) return ['No parcel is on this run yet.'];
-  const found: string[] = [];
-  const loadL = parcels.reduce((sum, parcel) => sum + parcel.box.volumeL, 0);
-  const capacityL = coordinator.coordinator?.capacityL ?? 0;
-  if (loadL > capacityL + 1e-6) found.push(`The boxes take ${loadL.toFixed(1)} L, the vehicle has ${capacityL} L.`);
-  if (cutOffInstant(counter, frame.date) === null) found.push(`The ${counter.name} takes no drop-off that day.`);
-  else if (!canBeDriven) found.push('No order of the stops keeps the collection windows, the cut-off and the longest run.');
-  const placed = new Set(problem.breeders.map(({ id }) => id));
-  for (const parcel of parcels) {
-    if (parcel.dropOff.counterId !== counter.id) found.push(`${parcel.code} is checked for the ${parcel.dropOff.name}, not this counter.`);
-    if (!placed.has(parcel.breeder.id)) found.push(`${parcel.code}: where ${parcel.breeder.name} lives is not known.`);
-    if (parcel.shipDate !== null && parcel.shipDate !== frame.date) found.push(`${parcel.code} is booked on ${parcel.shipDate}.`);
-    if (parcel.flexible && (frame.date < parcel.flexible.from || frame.date > parcel.flexible.to)) found.push(`${parcel.code} was not left open for this day.`);
-  }
-  return found;
 }

@@ -2,7 +2,15 @@ import type { Parcel, Person, Run } from '@shared/contract';
 import { notFound } from '@shared/errors';
 import type { Deps } from '../deps';
 import { has, type Actor } from '../http/actor';
-import { findRunParcels, findRuns, findStops, type RunFilter, type RunParcelRow, type RunRow, type StopRow } from './runs-queries';
+import {
+  findRunParcels,
+  findRuns,
+  findStops,
+  type RunFilter,
+  type RunParcelRow,
+  type RunRow,
+  type StopRow,
+} from './runs-queries';
 
 /** Runs in the form of the contract, with the few reads that a list takes too. */
 export async function readRuns(deps: Deps, filter: RunFilter): Promise<Run[]> {
@@ -12,7 +20,9 @@ export async function readRuns(deps: Deps, filter: RunFilter): Promise<Run[]> {
   const ids = rows.map(({ id }) => id);
   const stops = await findStops(db, ids);
   const links = await findRunParcels(db, { runIds: ids });
-  const parcels = new Map((await services.parcels.byIds(links.map((link) => link.parcel_id))).map((parcel) => [parcel.id, parcel]));
+  const parcels = new Map(
+    (await services.parcels.byIds(links.map((link) => link.parcel_id))).map((parcel) => [parcel.id, parcel]),
+  );
   const people = new Map((await services.people.list()).map((person) => [person.id, person]));
   const counters = new Map((await services.places.counters()).map((counter) => [counter.id, counter]));
   const { policy } = await services.policy.current();
@@ -23,10 +33,25 @@ export async function readRuns(deps: Deps, filter: RunFilter): Promise<Run[]> {
     return {
       ...figures(row),
       zone: policy.circleZone,
-      coordinator: { id: coordinator.id, name: coordinator.name, capacityL: coordinator.coordinator?.capacityL ?? 0, lat: coordinator.lat ?? 0, lon: coordinator.lon ?? 0 },
-      counter: { id: counter.id, name: counter.name, city: counter.city, state: counter.state, lat: counter.lat, lon: counter.lon },
+      coordinator: {
+        id: coordinator.id,
+        name: coordinator.name,
+        capacityL: coordinator.coordinator?.capacityL ?? 0,
+        lat: coordinator.lat ?? 0,
+        lon: coordinator.lon ?? 0,
+      },
+      counter: {
+        id: counter.id,
+        name: counter.name,
+        city: counter.city,
+        state: counter.state,
+        lat: counter.lat,
+        lon: counter.lon,
+      },
       loadL: Math.round(own.reduce((sum, { parcel }) => sum + parcel.box.volumeL, 0) * 10) / 10,
-      stops: stops.filter((stop) => stop.run_id === row.id).map((stop) => stopView(stop, need(people.get(stop.breeder_id)), own)),
+      stops: stops
+        .filter((stop) => stop.run_id === row.id)
+        .map((stop) => stopView(stop, need(people.get(stop.breeder_id)), own)),
       parcels: own.map(({ link, parcel }) => ({
         id: parcel.id,
         code: parcel.code,
@@ -55,7 +80,9 @@ const withParcel = (link: RunParcelRow, parcels: ReadonlyMap<number, Parcel>): L
 
 /** "corn snake, 2 × crested gecko". */
 export const whatOf = (parcel: Parcel): string =>
-  parcel.contents.map((line) => (line.quantity === 1 ? line.commonName : `${line.quantity} × ${line.commonName}`)).join(', ');
+  parcel.contents
+    .map((line) => (line.quantity === 1 ? line.commonName : `${line.quantity} × ${line.commonName}`))
+    .join(', ');
 
 const figures = (row: RunRow) => ({
   id: row.id,
@@ -72,7 +99,8 @@ const figures = (row: RunRow) => ({
   drivingCents: row.driving_cents,
   costCents: row.fixed_cents + row.driving_cents,
   aloneCents: row.alone_cents,
-  problems: JSON.parse(row.problems) as string[],
+  // What has left or is over has nothing to put right any more.
+  problems: ['proposed', 'confirmed'].includes(row.state) ? (JSON.parse(row.problems) as string[]) : [],
   note: row.note,
   version: row.version,
 });
@@ -107,7 +135,15 @@ export function seenBy(actor: Actor, run: Run): Run | null {
   if (has(actor, 'coordinator', 'admin')) return run;
   const parcels = run.parcels.filter((parcel) => parcel.breederId === actor.id);
   if (parcels.length === 0 || run.state === 'proposed') return null;
-  return { ...run, parcels, stops: run.stops.filter((stop) => stop.breederId === actor.id), note: '', coordinator: { ...run.coordinator, lat: 0, lon: 0 } };
+  return {
+    ...run,
+    parcels,
+    stops: run.stops.filter((stop) => stop.breederId === actor.id),
+    note: '',
+    // They may name other people's parcels.
+    problems: [],
+    coordinator: { ...run.coordinator, lat: 0, lon: 0 },
+  };
 }
 
 /** Throws 404 for what the actor may not see, as for what is not there. */

@@ -2,7 +2,14 @@ import { DateTime } from 'luxon';
 import type { Counter, Parcel, Person } from '@shared/contract';
 import { cutOffInstant } from '@shared/calendar/cut-off-instant';
 import type { Policy } from '@shared/policy/policy';
-import type { PoolBreeder, PoolCoordinator, PoolCounter, PoolCosts, PoolParcel, PoolProblem } from '@shared/pooling/problem';
+import type {
+  PoolBreeder,
+  PoolCoordinator,
+  PoolCounter,
+  PoolCosts,
+  PoolParcel,
+  PoolProblem,
+} from '@shared/pooling/problem';
 import type { Deps } from '../deps';
 
 /** The people and places that runs are made of, read once. */
@@ -39,13 +46,31 @@ export function circleMinute(instantMs: number, date: string, zone: string): num
 export function poolBreeder(person: Person, daysAway: readonly string[]): PoolBreeder | null {
   if (!person.breeder || person.lat === null || person.lon === null) return null;
   const { windowOpenMinute, windowCloseMinute, serviceMinutes } = person.breeder;
-  return { id: person.id, name: person.businessName ?? person.name, lat: person.lat, lon: person.lon, windowOpenMinute, windowCloseMinute, serviceMinutes, daysAway };
+  return {
+    id: person.id,
+    name: person.businessName ?? person.name,
+    lat: person.lat,
+    lon: person.lon,
+    windowOpenMinute,
+    windowCloseMinute,
+    serviceMinutes,
+    daysAway,
+  };
 }
 
 export function poolCoordinator(person: Person, freeDates: readonly string[]): PoolCoordinator | null {
   if (!person.coordinator || person.lat === null || person.lon === null) return null;
   const { capacityL, longestRunMinutes, centsPerMile } = person.coordinator;
-  return { id: person.id, name: person.name, lat: person.lat, lon: person.lon, capacityL, longestRunMinutes, centsPerMile, freeDates };
+  return {
+    id: person.id,
+    name: person.name,
+    lat: person.lat,
+    lon: person.lon,
+    capacityL,
+    longestRunMinutes,
+    centsPerMile,
+    freeDates,
+  };
 }
 
 /** A counter with its cut-offs on the given dates, on the circle's clock. */
@@ -71,8 +96,15 @@ export const poolParcel = (parcel: Parcel, date: string): PoolParcel => ({
   dayFixed: true,
 });
 
-/** The problem of one run alone: its coordinator, counter and parcels on its day. */
-export function oneRunProblem(world: RunWorld, coordinator: Person, counter: Counter, date: string, parcels: readonly Parcel[]): PoolProblem {
+/** The problem of one run alone: its coordinator, counter and parcels on its day. Nobody leaves before `earliestMinute`. */
+export function oneRunProblem(
+  world: RunWorld,
+  coordinator: Person,
+  counter: Counter,
+  date: string,
+  parcels: readonly Parcel[],
+  earliestMinute: number | null,
+): PoolProblem {
   const ids = [...new Set(parcels.map((parcel) => parcel.breeder.id))];
   const driver = poolCoordinator(coordinator, [date]);
   return {
@@ -86,6 +118,6 @@ export function oneRunProblem(world: RunWorld, coordinator: Person, counter: Cou
     fixedRuns: [],
     pins: [],
     costs: world.costs,
-    earliestMinutes: {},
+    earliestMinutes: earliestMinute === null ? {} : { [date]: earliestMinute },
   };
 }

@@ -47,8 +47,10 @@ export interface RunFilter {
   readonly states?: readonly RunState[];
 }
 
-export async function findRuns(db: Knex, filter: RunFilter): Promise<RunRow[]> {
+/** By day, then by id. */
+export function findRuns(db: Knex, filter: RunFilter): Promise<RunRow[]> {
   return db<RunRow>('runs')
+    .select<RunRow[]>('runs.*')
     .modify((query) => {
       if (filter.ids) void query.whereIn('id', filter.ids);
       if (filter.from) void query.where('date', '>=', filter.from);
@@ -61,32 +63,46 @@ export async function findRuns(db: Knex, filter: RunFilter): Promise<RunRow[]> {
 export const findStops = (db: Knex, runIds: readonly number[]): Promise<StopRow[]> =>
   db<StopRow>('run_stops').whereIn('run_id', runIds).orderBy(['run_id', 'seq']);
 
-export const findRunParcels = (db: Knex, by: { runIds: readonly number[] } | { parcelIds: readonly number[] }): Promise<RunParcelRow[]> =>
+export const findRunParcels = (
+  db: Knex,
+  by: { runIds: readonly number[] } | { parcelIds: readonly number[] },
+): Promise<RunParcelRow[]> =>
   'runIds' in by
     ? db<RunParcelRow>('run_parcels').whereIn('run_id', by.runIds).orderBy('parcel_id')
     : db<RunParcelRow>('run_parcels').whereIn('parcel_id', by.parcelIds).orderBy('parcel_id');
 
+/** An empty proposed run; its sheet is to be worked out next. */
 export async function insertRun(
   db: Knex,
   run: { coordinatorId: number; counterId: number; date: string },
-  sheet: RunSheet,
   now: string,
 ): Promise<number> {
-  const [id] = (await db('runs').insert({
+  const [id] = await db('runs').insert({
     state: 'proposed',
     date: run.date,
     coordinator_id: run.coordinatorId,
     counter_id: run.counterId,
-    ...sheetRow(sheet),
+    depart_at: now,
+    arrive_at: now,
+    cut_off_at: now,
+    drive_minutes: 0,
+    miles: 0,
+    last_leg_minutes: 0,
+    fixed_cents: 0,
+    driving_cents: 0,
+    alone_cents: 0,
     created_at: now,
     updated_at: now,
-  })) as number[];
+  });
   return id ?? 0;
 }
 
 /** Writes what follows from the parcels, the stops and the shares, and the next version. */
 export async function writeSheet(db: Knex, runId: number, sheet: RunSheet, now: string): Promise<void> {
-  await db('runs').where({ id: runId }).update({ ...sheetRow(sheet), updated_at: now }).increment('version', 1);
+  await db('runs')
+    .where({ id: runId })
+    .update({ ...sheetRow(sheet), updated_at: now })
+    .increment('version', 1);
   await db('run_stops').where({ run_id: runId }).del();
   for (const [index, stop] of sheet.stops.entries())
     await db('run_stops').insert({
@@ -117,8 +133,16 @@ const sheetRow = (sheet: RunSheet) => ({
 });
 
 /** Sets columns of a run and its next version. */
-export async function setRun(db: Knex, runId: number, columns: Record<string, unknown>, now: string): Promise<void> {
-  await db('runs').where({ id: runId }).update({ ...columns, updated_at: now }).increment('version', 1);
+export async function setRun(
+  db: Knex,
+  runId: number,
+  columns: Record<string, unknown>,
+  now: string,
+): Promise<void> {
+  await db('runs')
+    .where({ id: runId })
+    .update({ ...columns, updated_at: now })
+    .increment('version', 1);
 }
 
 export async function putOnRun(db: Knex, runId: number, parcelId: number, pinned = false): Promise<void> {

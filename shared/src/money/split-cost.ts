@@ -9,7 +9,8 @@ export interface Sharer {
  * over all orders. `costOf` is asked for every subset of the players as a bit mask; the empty one costs 0.
  */
 export function shapleyValues(players: number, costOf: (mask: number) => number): number[] {
-  if (players > 12) throw new RangeError(`The exact value is worked out for up to 12 players, not ${players}.`);
+  if (players > 12)
+    throw new RangeError(`The exact value is worked out for up to 12 players, not ${players}.`);
   // weight[s] = s! (n − s − 1)! / n!, by recursion to stay within small numbers
   const weight = Array.from({ length: players }, () => 1 / players);
   for (let s = 1; s < players; s++) weight[s] = ((weight[s - 1] as number) * s) / (players - s);
@@ -19,7 +20,9 @@ export function shapleyValues(players: number, costOf: (mask: number) => number)
     const size = bits(mask);
     for (let player = 0; player < players; player++)
       if (!(mask & (1 << player)))
-        values[player] = (values[player] as number) + (weight[size] as number) * ((costs[mask | (1 << player)] as number) - (costs[mask] as number));
+        values[player] =
+          (values[player] as number) +
+          (weight[size] as number) * ((costs[mask | (1 << player)] as number) - (costs[mask] as number));
   }
   return values;
 }
@@ -28,7 +31,9 @@ export function shapleyValues(players: number, costOf: (mask: number) => number)
 export function wholeCents(parts: readonly number[], totalCents: number): number[] {
   const floors = parts.map((part) => Math.floor(part + 1e-9));
   const rest = totalCents - floors.reduce((sum, cents) => sum + cents, 0);
-  const order = parts.map((part, index) => ({ index, remainder: part - (floors[index] as number) })).sort((a, b) => b.remainder - a.remainder || a.index - b.index);
+  const order = parts
+    .map((part, index) => ({ index, remainder: part - (floors[index] as number) }))
+    .sort((a, b) => b.remainder - a.remainder || a.index - b.index);
   const shares = [...floors];
   const step = Math.sign(rest);
   for (let given = 0; given < Math.abs(rest); given++) {
@@ -44,7 +49,9 @@ export function wholeCents(parts: readonly number[], totalCents: number): number
  * drive (`drivingOf`, breeders in ascending order as bits), and equally on a breeder's own parcels.
  */
 export function splitCost(
-  sharers: readonly Sharer[], cost: { readonly fixedCents: number; readonly drivingCents: number }, drivingOf: (mask: number) => number,
+  sharers: readonly Sharer[],
+  cost: { readonly fixedCents: number; readonly drivingCents: number },
+  drivingOf: (mask: number) => number,
 ): ReadonlyMap<number, number> {
   if (sharers.length === 0) return new Map();
   const breeders = [...new Set(sharers.map(({ breederId }) => breederId))].sort((a, b) => a - b);

@@ -22,9 +22,27 @@ export interface Plan {
 
 export interface Violation {
   readonly code:
-    | 'parcel-twice' | 'parcel-lost' | 'parcel-unknown' | 'day-not-safe' | 'wrong-counter' | 'breeder-away' | 'pin-broken'
-    | 'no-stop' | 'idle-stop' | 'stop-twice' | 'confirmed-stop-lost' | 'capacity' | 'window' | 'cut-off' | 'too-long' | 'too-early'
-    | 'driver-not-free' | 'driver-twice' | 'counter-closed' | 'unknown';
+    | 'parcel-twice'
+    | 'parcel-lost'
+    | 'parcel-unknown'
+    | 'day-not-safe'
+    | 'wrong-counter'
+    | 'breeder-away'
+    | 'pin-broken'
+    | 'no-stop'
+    | 'idle-stop'
+    | 'stop-twice'
+    | 'confirmed-stop-lost'
+    | 'capacity'
+    | 'window'
+    | 'cut-off'
+    | 'too-long'
+    | 'too-early'
+    | 'driver-not-free'
+    | 'driver-twice'
+    | 'run-closed'
+    | 'counter-closed'
+    | 'unknown';
   readonly text: string;
 }
 
@@ -33,23 +51,33 @@ export interface Violation {
  * the search but the estimate of a leg. An empty answer means the plan can be carried out.
  */
 export function checkPlan(problem: PoolProblem, plan: Plan): Violation[] {
-  return [...checkParcels(problem, plan), ...checkDrivers(problem, plan), ...plan.runs.flatMap((run) => checkRun(problem, run))];
+  return [
+    ...checkParcels(problem, plan),
+    ...checkDrivers(problem, plan),
+    ...plan.runs.flatMap((run) => checkRun(problem, run)),
+  ];
 }
 
 function checkParcels(problem: PoolProblem, plan: Plan): Violation[] {
   const found: Violation[] = [];
   const times = new Map<number, number>();
-  for (const id of [...plan.runs.flatMap(({ parcelIds }) => parcelIds), ...plan.unplacedIds]) times.set(id, (times.get(id) ?? 0) + 1);
+  for (const id of [...plan.runs.flatMap(({ parcelIds }) => parcelIds), ...plan.unplacedIds])
+    times.set(id, (times.get(id) ?? 0) + 1);
   for (const { id } of problem.parcels) {
     const count = times.get(id) ?? 0;
-    if (count === 0) found.push({ code: 'parcel-lost', text: `Parcel ${id} is neither on a run nor unplaced.` });
+    if (count === 0)
+      found.push({ code: 'parcel-lost', text: `Parcel ${id} is neither on a run nor unplaced.` });
     if (count > 1) found.push({ code: 'parcel-twice', text: `Parcel ${id} is named ${count} times.` });
     times.delete(id);
   }
-  for (const id of times.keys()) found.push({ code: 'parcel-unknown', text: `Parcel ${id} is not part of the problem.` });
+  for (const id of times.keys())
+    found.push({ code: 'parcel-unknown', text: `Parcel ${id} is not part of the problem.` });
   for (const pin of problem.pins) {
     const run = plan.runs.find(({ parcelIds }) => parcelIds.includes(pin.parcelId));
-    if (run && (run.coordinatorId !== pin.coordinatorId || run.date !== pin.date || run.counterId !== pin.counterId))
+    if (
+      run &&
+      (run.coordinatorId !== pin.coordinatorId || run.date !== pin.date || run.counterId !== pin.counterId)
+    )
       found.push({ code: 'pin-broken', text: `Parcel ${pin.parcelId} is pinned to another run.` });
   }
   return found;
@@ -62,9 +90,13 @@ function checkDrivers(problem: PoolProblem, plan: Plan): Violation[] {
     const key = `${run.coordinatorId} on ${run.date}`;
     if (seen.has(key)) found.push({ code: 'driver-twice', text: `Coordinator ${key} drives twice.` });
     seen.add(key);
-    const fixed = problem.fixedRuns.find((other) => other.coordinatorId === run.coordinatorId && other.date === run.date);
+    const fixed = problem.fixedRuns.find(
+      (other) => other.coordinatorId === run.coordinatorId && other.date === run.date,
+    );
     if ((fixed?.runId ?? null) !== run.runId || (fixed && fixed.counterId !== run.counterId))
       found.push({ code: 'driver-twice', text: `Coordinator ${key} has a confirmed run already.` });
+    if (fixed && fixed.takes !== 'more')
+      found.push({ code: 'run-closed', text: `The run of coordinator ${key} takes nothing from a plan.` });
     const coordinator = problem.coordinators.find(({ id }) => id === run.coordinatorId);
     if (!fixed && !coordinator?.freeDates.includes(run.date))
       found.push({ code: 'driver-not-free', text: `Coordinator ${key} is not free.` });
@@ -80,16 +112,22 @@ function checkRun(problem: PoolProblem, run: PlannedRun): Violation[] {
   for (const parcel of parcels) {
     if (!parcel.days.some(({ date }) => date === run.date))
       found.push({ code: 'day-not-safe', text: `Parcel ${parcel.id} has no safe day on ${run.date}.` });
-    if (parcel.counterId !== run.counterId) found.push({ code: 'wrong-counter', text: `Parcel ${parcel.id} is for another counter.` });
-    if (!run.order.includes(parcel.breederId)) found.push({ code: 'no-stop', text: `Nobody collects parcel ${parcel.id}.` });
+    if (parcel.counterId !== run.counterId)
+      found.push({ code: 'wrong-counter', text: `Parcel ${parcel.id} is for another counter.` });
+    if (!run.order.includes(parcel.breederId))
+      found.push({ code: 'no-stop', text: `Nobody collects parcel ${parcel.id}.` });
     if (problem.breeders.find(({ id }) => id === parcel.breederId)?.daysAway.includes(run.date))
       found.push({ code: 'breeder-away', text: `The breeder of parcel ${parcel.id} is away.` });
   }
   const needed = new Set([...(fixed?.breederIds ?? []), ...parcels.map(({ breederId }) => breederId)]);
-  for (const id of run.order) if (!needed.has(id)) found.push({ code: 'idle-stop', text: `There is nothing to collect at breeder ${id}.` });
+  for (const id of run.order)
+    if (!needed.has(id))
+      found.push({ code: 'idle-stop', text: `There is nothing to collect at breeder ${id}.` });
   for (const id of fixed?.breederIds ?? [])
-    if (!run.order.includes(id)) found.push({ code: 'confirmed-stop-lost', text: `The confirmed stop at breeder ${id} is left out.` });
-  if (new Set(run.order).size !== run.order.length) found.push({ code: 'stop-twice', text: 'A breeder is visited twice.' });
+    if (!run.order.includes(id))
+      found.push({ code: 'confirmed-stop-lost', text: `The confirmed stop at breeder ${id} is left out.` });
+  if (new Set(run.order).size !== run.order.length)
+    found.push({ code: 'stop-twice', text: 'A breeder is visited twice.' });
   const loadL = parcels.reduce((sum, { volumeL }) => sum + volumeL, fixed?.volumeL ?? 0);
   if (loadL > (coordinator?.capacityL ?? 0) + 1e-6)
     found.push({ code: 'capacity', text: `${loadL} L do not fit into ${coordinator?.capacityL ?? 0} L.` });
@@ -100,16 +138,23 @@ function checkDrive(problem: PoolProblem, run: PlannedRun): Violation[] {
   const coordinator = problem.coordinators.find(({ id }) => id === run.coordinatorId);
   const counter = problem.counters.find(({ id }) => id === run.counterId);
   const stops = run.order.map((id) => problem.breeders.find((breeder) => breeder.id === id));
-  if (!coordinator || !counter || stops.some((stop) => !stop)) return [{ code: 'unknown', text: 'Somebody on the run is not known.' }];
+  if (!coordinator || !counter || stops.some((stop) => !stop))
+    return [{ code: 'unknown', text: 'Somebody on the run is not known.' }];
   const cutOffMinute = counter.cutOffMinutes[run.date];
-  if (cutOffMinute === undefined) return [{ code: 'counter-closed', text: `The counter takes nothing on ${run.date}.` }];
+  if (cutOffMinute === undefined)
+    return [{ code: 'counter-closed', text: `The counter takes nothing on ${run.date}.` }];
   const found: Violation[] = [];
-  if (run.departMinute < (problem.earliestMinutes[run.date] ?? 0)) found.push({ code: 'too-early', text: 'It would have to leave before now.' });
+  if (run.departMinute < (problem.earliestMinutes[run.date] ?? 0))
+    found.push({ code: 'too-early', text: 'It would have to leave before now.' });
   let minute = run.departMinute;
   let here: { lat: number; lon: number } = coordinator;
   for (const stop of stops as PoolBreeder[]) {
     minute += estimateLeg(here, stop, problem.costs.circuity).minutes;
-    if (minute > stop.windowCloseMinute) found.push({ code: 'window', text: `Breeder ${stop.id} is reached ${minute - stop.windowCloseMinute} min late.` });
+    if (minute > stop.windowCloseMinute)
+      found.push({
+        code: 'window',
+        text: `Breeder ${stop.id} is reached ${minute - stop.windowCloseMinute} min late.`,
+      });
     minute = Math.max(minute, stop.windowOpenMinute) + stop.serviceMinutes;
     here = stop;
   }
@@ -117,6 +162,7 @@ function checkDrive(problem: PoolProblem, run: PlannedRun): Violation[] {
   const late = minute - (cutOffMinute - problem.costs.cutOffSlackMinutes);
   if (late > 0) found.push({ code: 'cut-off', text: `The counter is reached ${late} min too late.` });
   const length = minute - run.departMinute;
-  if (length > coordinator.longestRunMinutes) found.push({ code: 'too-long', text: `The run takes ${length} min.` });
+  if (length > coordinator.longestRunMinutes)
+    found.push({ code: 'too-long', text: `The run takes ${length} min.` });
   return found;
 }

@@ -18,12 +18,17 @@ const mostColumns = 60_000;
 
 /** Breeders with a parcel that may ride in the slot, ascending. */
 export const breedersOf = (instance: Instance, slot: SlotInfo): number[] =>
-  [...new Set(slot.eligible.map((parcel) => instance.parcels[parcel]?.breederId ?? -1))].sort((a, b) => a - b);
+  [...new Set(slot.eligible.map((parcel) => instance.parcels[parcel]?.breederId ?? -1))].sort(
+    (a, b) => a - b,
+  );
 
 /** Whether listing every possible run is feasible: then the model's optimum is the true one. */
 export function isSmall(instance: Instance): boolean {
   const sizes = instance.slots.map((slot) => breedersOf(instance, slot).length);
-  return sizes.every((size) => size <= exactBreeders) && sizes.reduce((sum, size) => sum + 2 ** size - 1, 0) <= mostColumns;
+  return (
+    sizes.every((size) => size <= exactBreeders) &&
+    sizes.reduce((sum, size) => sum + 2 ** size - 1, 0) <= mostColumns
+  );
 }
 
 /** Every run that could be driven, exactly priced. Only for small instances. */
@@ -32,7 +37,11 @@ export function allColumns(instance: Instance): Column[] {
     const breeders = breedersOf(instance, slot);
     const columns: Column[] = [];
     for (let mask = 1; mask < 1 << breeders.length; mask++) {
-      const column = columnOf(instance, slot, breeders.filter((_, bit) => mask & (1 << bit)));
+      const column = columnOf(
+        instance,
+        slot,
+        breeders.filter((_, bit) => mask & (1 << bit)),
+      );
       if (column) columns.push(column);
     }
     return columns;
@@ -53,7 +62,8 @@ export function someColumns(instance: Instance): Column[] {
     };
     for (const breeder of breeders) {
       const near = nearest(instance, breeder, breeders);
-      for (let count = 0; count < Math.min(near.length + 1, mostStops); count++) add([breeder, ...near.slice(0, count)]);
+      for (let count = 0; count < Math.min(near.length + 1, mostStops); count++)
+        add([breeder, ...near.slice(0, count)]);
       for (const [i, second] of near.slice(0, 5).entries()) {
         add([breeder, second]);
         for (const third of near.slice(i + 1, 5)) add([breeder, second, third]);
@@ -72,7 +82,9 @@ export function columnOf(instance: Instance, slot: SlotInfo, breederIds: readonl
 
 function leastVolumeL(instance: Instance, slot: SlotInfo, breederIds: readonly number[]): number {
   return breederIds.reduce((sum, id) => {
-    const volumes = slot.eligible.flatMap((index) => (instance.parcels[index]?.breederId === id ? [instance.parcels[index].volumeL] : []));
+    const volumes = slot.eligible.flatMap((index) =>
+      instance.parcels[index]?.breederId === id ? [instance.parcels[index].volumeL] : [],
+    );
     return sum + Math.min(...volumes);
   }, 0);
 }

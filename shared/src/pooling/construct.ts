@@ -79,7 +79,11 @@ export function fillByRegret(instance: Instance, draft: Draft): void {
     for (const parcel of waiting) {
       if (!choices.has(parcel)) choices.set(parcel, choose(instance, draft, parcel));
       const choice = choices.get(parcel) ?? null;
-      if (choice && (!best || choice.regret > best.regret || (choice.regret === best.regret && choice.added < best.added))) best = choice;
+      if (
+        choice &&
+        (!best || choice.regret > best.regret || (choice.regret === best.regret && choice.added < best.added))
+      )
+        best = choice;
     }
     if (!best) return;
     put(instance, draft, best.parcel, best.slot);
@@ -88,7 +92,8 @@ export function fillByRegret(instance: Instance, draft: Draft): void {
     // Only who could ride in the changed coordinator-day has to think again.
     const { group } = instance.slots[best.slot] as SlotInfo;
     for (const parcel of waiting)
-      if ((instance.options[parcel] ?? []).some(({ slot }) => instance.slots[slot]?.group === group)) choices.delete(parcel);
+      if ((instance.options[parcel] ?? []).some(({ slot }) => instance.slots[slot]?.group === group))
+        choices.delete(parcel);
   }
 }
 

@@ -16,7 +16,12 @@ export interface AloneTrip {
  * What a breeder who drives to the counter and back would spend. Valued like a run, so that the two compare: mileage at
  * `aloneCentsPerMile` (the IRS rate by default) and each minute as a coordinator's. Cents are rounded to whole ones.
  */
-export function aloneTrip(breeder: Point, counter: Point, costs: PoolCosts, aloneCentsPerMile: number): AloneTrip {
+export function aloneTrip(
+  breeder: Point,
+  counter: Point,
+  costs: PoolCosts,
+  aloneCentsPerMile: number,
+): AloneTrip {
   const leg = estimateLeg(breeder, counter, costs.circuity);
   return {
     cents: Math.round(2 * legCents(leg, aloneCentsPerMile, costs.driverMinuteCents)),

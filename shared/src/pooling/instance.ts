@@ -31,16 +31,24 @@ export interface Instance {
   cents(slot: SlotInfo, breederIds: readonly number[]): number;
 }
 
-/** Lays out the slots: coordinators who are free and not taken, counters that take drop-offs that day. */
-export function createInstance(problem: PoolProblem): Instance {
-  const pricer = createRunPricer(problem);
+/**
+ * Lays out the slots: coordinators who are free and not taken, counters that take drop-offs that day. A `pricer` of a
+ * problem with the same people, places and costs may be handed on, for its answers are kept.
+ */
+export function createInstance(problem: PoolProblem, pricer = createRunPricer(problem)): Instance {
   const slots = slotsOf(problem);
   const options = problem.parcels.map((_, index) =>
-    slots.filter((slot) => slot.eligible.includes(index)).map((slot) => ({ slot: slot.index, penaltyCents: penalty(problem, index, slot.date) })),
+    slots
+      .filter((slot) => slot.eligible.includes(index))
+      .map((slot) => ({ slot: slot.index, penaltyCents: penalty(problem, index, slot.date) })),
   );
   const base = slots.map((slot) => (slot.fixed ? fixedCents(pricer, slot, slot.fixed) : 0));
   return {
-    problem, parcels: problem.parcels, slots, options, pricer,
+    problem,
+    parcels: problem.parcels,
+    slots,
+    options,
+    pricer,
     cents(slot, breederIds) {
       const { fixed } = slot;
       if (fixed) {
@@ -57,7 +65,9 @@ export function createInstance(problem: PoolProblem): Instance {
 }
 
 const fixedCents = (pricer: RunPricer, slot: SlotInfo, fixed: FixedRun): number =>
-  (pricer.price(slot, fixed.breederIds) ?? pricer.relaxed(slot, fixed.breederIds)).drivingCents;
+  fixed.breederIds.length === 0
+    ? 0
+    : (pricer.price(slot, fixed.breederIds) ?? pricer.relaxed(slot, fixed.breederIds)).drivingCents;
 
 const penalty = (problem: PoolProblem, parcel: number, date: string): number =>
   problem.parcels[parcel]?.days.find((day) => day.date === date)?.penaltyCents ?? 0;
@@ -72,10 +82,15 @@ function slotsOf(problem: PoolProblem): SlotInfo[] {
         const slot = { coordinatorId: coordinator.id, date, counterId: counter.id };
         const group = `${coordinator.id}|${date}`;
         const fixed = fixedBy.get(group) ?? null;
-        if (fixed ? fixed.counterId !== counter.id : !coordinator.freeDates.includes(date)) continue;
+        const drives = fixed
+          ? fixed.takes === 'more' && fixed.counterId === counter.id
+          : coordinator.freeDates.includes(date);
+        if (!drives) continue;
         if (counter.cutOffMinutes[date] === undefined) continue;
         const roomL = coordinator.capacityL - (fixed?.volumeL ?? 0);
-        const eligible = problem.parcels.flatMap((parcel, index) => (mayRide(problem, parcel, slot, roomL) ? [index] : []));
+        const eligible = problem.parcels.flatMap((parcel, index) =>
+          mayRide(problem, parcel, slot, roomL) ? [index] : [],
+        );
         if (eligible.length > 0) found.push({ ...slot, index: found.length, group, roomL, fixed, eligible });
       }
   return found;

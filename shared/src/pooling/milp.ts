@@ -32,22 +32,38 @@ export function milpText(instance: Instance, columns: readonly Column[]): string
     else bySlot.set(column.slot, [entry]);
   });
   const rows: string[] = [];
-  const row = (terms: readonly string[], rest: string) => rows.push(` r${rows.length}: ${wrap(terms)} ${rest}`);
+  const row = (terms: readonly string[], rest: string) =>
+    rows.push(` r${rows.length}: ${wrap(terms)} ${rest}`);
   instance.parcels.forEach((_, parcel) =>
-    row([...(instance.options[parcel] ?? []).map(({ slot }) => `+ ${x(parcel, slot)}`), `+ s${parcel}`], '= 1'),
+    row(
+      [...(instance.options[parcel] ?? []).map(({ slot }) => `+ ${x(parcel, slot)}`), `+ s${parcel}`],
+      '= 1',
+    ),
   );
   for (const slot of instance.slots) slotRows(instance, slot, bySlot.get(slot.index) ?? [], row);
   for (const group of new Set(instance.slots.map((slot) => slot.group))) {
-    const terms = instance.slots.filter((slot) => slot.group === group).flatMap(({ index }) => (bySlot.get(index) ?? []).map(({ name }) => `+ ${name}`));
+    const terms = instance.slots
+      .filter((slot) => slot.group === group)
+      .flatMap(({ index }) => (bySlot.get(index) ?? []).map(({ name }) => `+ ${name}`));
     if (terms.length > 1) row(terms, '<= 1');
   }
   return [
-    'Minimize', ` obj: ${wrap(objective(instance, columns))}`,
-    'Subject To', ...rows,
-    'Bounds', ...instance.slots.flatMap((slot) => breedersOf(instance, slot).map((id) => ` 0 <= ${y(slot.index, id)} <= 1`)),
-    'Binary', ...columns.map((_, index) => ` l${index}`),
-    ...instance.options.flatMap((options, parcel) => [...options.map(({ slot }) => ` ${x(parcel, slot)}`), ` s${parcel}`]),
-    'End', '',
+    'Minimize',
+    ` obj: ${wrap(objective(instance, columns))}`,
+    'Subject To',
+    ...rows,
+    'Bounds',
+    ...instance.slots.flatMap((slot) =>
+      breedersOf(instance, slot).map((id) => ` 0 <= ${y(slot.index, id)} <= 1`),
+    ),
+    'Binary',
+    ...columns.map((_, index) => ` l${index}`),
+    ...instance.options.flatMap((options, parcel) => [
+      ...options.map(({ slot }) => ` ${x(parcel, slot)}`),
+      ` s${parcel}`,
+    ]),
+    'End',
+    '',
   ].join('\n');
 }
 
@@ -55,25 +71,33 @@ function objective(instance: Instance, columns: readonly Column[]): string[] {
   return [
     ...columns.map(({ cents }, index) => `+ ${cents} l${index}`),
     ...instance.options.flatMap((options, parcel) => [
-      ...options.filter(({ penaltyCents }) => penaltyCents !== 0).map((option) => `+ ${option.penaltyCents} ${x(parcel, option.slot)}`),
+      ...options
+        .filter(({ penaltyCents }) => penaltyCents !== 0)
+        .map((option) => `+ ${option.penaltyCents} ${x(parcel, option.slot)}`),
       `+ ${instance.problem.costs.unplacedCents} s${parcel}`,
     ]),
   ];
 }
 
 function slotRows(
-  instance: Instance, slot: SlotInfo, columns: readonly { column: Column; name: string }[],
+  instance: Instance,
+  slot: SlotInfo,
+  columns: readonly { column: Column; name: string }[],
   row: (terms: readonly string[], rest: string) => void,
 ): void {
   for (const id of breedersOf(instance, slot)) {
     const visit = y(slot.index, id);
     const own = slot.eligible.filter((parcel) => instance.parcels[parcel]?.breederId === id);
-    const visiting = columns.filter(({ column }) => column.breederIds.includes(id)).map(({ name }) => `- ${name}`);
+    const visiting = columns
+      .filter(({ column }) => column.breederIds.includes(id))
+      .map(({ name }) => `- ${name}`);
     row([`+ ${visit}`, ...visiting], '= 0');
     for (const parcel of own) row([`+ ${x(parcel, slot.index)}`, `- ${visit}`], '<= 0');
     row([`+ ${visit}`, ...own.map((parcel) => `- ${x(parcel, slot.index)}`)], '<= 0');
   }
-  const load = slot.eligible.map((parcel) => `+ ${instance.parcels[parcel]?.volumeL ?? 0} ${x(parcel, slot.index)}`);
+  const load = slot.eligible.map(
+    (parcel) => `+ ${instance.parcels[parcel]?.volumeL ?? 0} ${x(parcel, slot.index)}`,
+  );
   row([...load, ...columns.map(({ name }) => `- ${slot.roomL} ${name}`)], '<= 1e-6');
 }
 
@@ -86,4 +110,6 @@ function wrap(terms: readonly string[]): string {
 
 /** Reads where each parcel rides out of a solver's values. */
 export const placementOf = (instance: Instance, values: Readonly<Record<string, number>>): Placement =>
-  instance.options.map((options, parcel) => options.find(({ slot }) => (values[x(parcel, slot)] ?? 0) > 0.5)?.slot ?? -1);
+  instance.options.map(
+    (options, parcel) => options.find(({ slot }) => (values[x(parcel, slot)] ?? 0) > 0.5)?.slot ?? -1,
+  );

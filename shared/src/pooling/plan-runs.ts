@@ -46,14 +46,18 @@ export function planRuns(problem: PoolProblem, solveMilp: SolveMilp, options: Pl
   const columns = small ? allColumns(instance) : merge(seen, someColumns(instance));
   const answer = columns.length === 0 ? null : solveMilp(milpText(instance, columns), options.milpSeconds);
   const solved = answer?.values ? placementOf(instance, answer.values) : null;
-  const placement = solved && objectiveCents(instance, solved) < objectiveCents(instance, found) ? solved : found;
+  const placement =
+    solved && objectiveCents(instance, solved) < objectiveCents(instance, found) ? solved : found;
   const plan = planOf(instance, placement);
   const violations = checkPlan(problem, plan);
-  if (violations.length > 0) throw new Error(`A plan failed its check: ${violations.map(({ text }) => text).join(' ')}`);
+  if (violations.length > 0)
+    throw new Error(`A plan failed its check: ${violations.map(({ text }) => text).join(' ')}`);
   const objective = objectiveCents(instance, placement);
   return {
     ...plan,
-    unplaced: placement.flatMap((at, index) => (at === -1 ? [explainUnplaced(problem, placement, index)] : [])),
+    unplaced: placement.flatMap((at, index) =>
+      at === -1 ? [explainUnplaced(problem, placement, index, instance.pricer)] : [],
+    ),
     costCents: plan.runs.reduce((sum, run) => sum + run.fixedCents + run.drivingCents, 0),
     objectiveCents: objective,
     boundCents: columns.length === 0 ? objective : Math.min(objective, wholeBound(answer?.bound ?? null)),
@@ -68,7 +72,8 @@ function merge(seen: ReadonlyMap<string, Column>, more: readonly Column[]): Colu
 }
 
 /** Every cost is a whole number of cents, so a bound may be rounded up; no cost is negative. */
-const wholeBound = (bound: number | null): number => Math.max(0, bound === null ? 0 : Math.ceil(bound - 1e-4));
+const wholeBound = (bound: number | null): number =>
+  Math.max(0, bound === null ? 0 : Math.ceil(bound - 1e-4));
 
 /** Drives and prices the runs of a placement. */
 export function planOf(instance: Instance, placement: Placement): Plan {
@@ -77,14 +82,27 @@ export function planOf(instance: Instance, placement: Placement): Plan {
     if (added.length === 0) return [];
     const ids = [...new Set([...(slot.fixed?.breederIds ?? []), ...added])];
     const run = instance.pricer.price(slot, ids) ?? (slot.fixed ? instance.pricer.relaxed(slot, ids) : null);
-    if (!run) throw new Error(`The run of coordinator ${slot.coordinatorId} on ${slot.date} cannot be driven.`);
+    if (!run)
+      throw new Error(`The run of coordinator ${slot.coordinatorId} on ${slot.date} cannot be driven.`);
     const fixedCents = slot.fixed ? 0 : instance.problem.costs.runFixedCents;
-    return [{
-      coordinatorId: slot.coordinatorId, date: slot.date, counterId: slot.counterId, runId: slot.fixed?.runId ?? null,
-      order: run.order, departMinute: run.departMinute,
-      parcelIds: placement.flatMap((at, index) => (at === slot.index ? [instance.parcels[index]?.id ?? -1] : [])),
-      fixedCents, drivingCents: instance.cents(slot, added) - fixedCents,
-    }];
+    return [
+      {
+        coordinatorId: slot.coordinatorId,
+        date: slot.date,
+        counterId: slot.counterId,
+        runId: slot.fixed?.runId ?? null,
+        order: run.order,
+        departMinute: run.departMinute,
+        parcelIds: placement.flatMap((at, index) =>
+          at === slot.index ? [instance.parcels[index]?.id ?? -1] : [],
+        ),
+        fixedCents,
+        drivingCents: instance.cents(slot, added) - fixedCents,
+      },
+    ];
   });
-  return { runs, unplacedIds: placement.flatMap((at, index) => (at === -1 ? [instance.parcels[index]?.id ?? -1] : [])) };
+  return {
+    runs,
+    unplacedIds: placement.flatMap((at, index) => (at === -1 ? [instance.parcels[index]?.id ?? -1] : [])),
+  };
 }

@@ -14,7 +14,10 @@ export function breedersIn(instance: Instance, placement: Placement, slot: SlotI
 
 /** Litres put into a slot. */
 export const volumeIn = (instance: Instance, placement: Placement, slot: SlotInfo): number =>
-  placement.reduce((sum, at, parcel) => (at === slot.index ? sum + (instance.parcels[parcel]?.volumeL ?? 0) : sum), 0);
+  placement.reduce(
+    (sum, at, parcel) => (at === slot.index ? sum + (instance.parcels[parcel]?.volumeL ?? 0) : sum),
+    0,
+  );
 
 /** The objective of a placement in cents: runs, preferences, unplaced parcels. Infinity when a run cannot be driven. */
 export function objectiveCents(instance: Instance, placement: Placement): number {
@@ -28,7 +31,8 @@ export function objectiveCents(instance: Instance, placement: Placement): number
   for (const slot of instance.slots) {
     const breeders = breedersIn(instance, placement, slot);
     if (breeders.length === 0) continue;
-    if (groups.has(slot.group) || volumeIn(instance, placement, slot) > slot.roomL + volumeTolerance) return Infinity;
+    if (groups.has(slot.group) || volumeIn(instance, placement, slot) > slot.roomL + volumeTolerance)
+      return Infinity;
     groups.add(slot.group);
     cents += instance.cents(slot, breeders);
   }

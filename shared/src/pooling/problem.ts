@@ -55,8 +55,10 @@ export interface PoolCounter extends Point {
   readonly cutOffMinutes: Readonly<Record<string, number>>;
 }
 
-/** A confirmed run: it stays as it is, and may take more parcels. */
+/** A run that was decided already: it stays as it is. */
 export interface FixedRun {
+  /** `more`: the plan may add parcels; `by-hand`: only a person does; `nothing`: it has left already. */
+  readonly takes: 'more' | 'by-hand' | 'nothing';
   readonly runId: number;
   readonly coordinatorId: number;
   readonly date: string;

@@ -1,6 +1,13 @@
 import { legCents } from './cost';
 import { mostStops, type Point, type PoolBreeder, type PoolProblem, type Slot } from './problem';
-import { bestPath, sequenceTable, type Path, type SequenceLeg, type SequenceProblem, type SequenceTable } from './sequence';
+import {
+  bestPath,
+  sequenceTable,
+  type Path,
+  type SequenceLeg,
+  type SequenceProblem,
+  type SequenceTable,
+} from './sequence';
 import { estimateLeg } from './travel';
 
 /** The cheapest way to drive a set of stops. */
@@ -21,6 +28,8 @@ export interface RunPricer {
 }
 
 const never = 1e7;
+/** A run to a counter that is shut that day is shown as if it had to be there by 17:00. */
+const shutCounterMinute = 17 * 60;
 
 /** `breederIds` of the pricer's world is every breeder of the problem; unknown ids throw. */
 export function createRunPricer(problem: PoolProblem): RunPricer {
@@ -55,10 +64,18 @@ export function createRunPricer(problem: PoolProblem): RunPricer {
       const loose = {
         ...exact,
         stops: exact.stops.map((stop) => ({ ...stop, openMinute: -never, closeMinute: never })),
-        earliestDepartMinute: -never, longestMinutes: never,
+        earliestDepartMinute: -never,
+        latestArriveMinute: exact.latestArriveMinute < 0 ? shutCounterMinute : exact.latestArriveMinute,
+        longestMinutes: never,
       };
-      const answer = priced(bestPath(loose), breederIds.toSorted((a, b) => a - b));
-      return { ...need(answer, 'a path without limits'), departMinute: Math.max(answer?.departMinute ?? 0, exact.earliestDepartMinute) };
+      const answer = priced(
+        bestPath(loose),
+        breederIds.toSorted((a, b) => a - b),
+      );
+      return {
+        ...need(answer, 'a path without limits'),
+        departMinute: Math.max(answer?.departMinute ?? 0, exact.earliestDepartMinute),
+      };
     },
   };
 }
@@ -66,16 +83,28 @@ export function createRunPricer(problem: PoolProblem): RunPricer {
 /** Minutes and cents of the stops of a run, as the sequence takes them. */
 export function sequenceOf(problem: PoolProblem, slot: Slot, stops: readonly PoolBreeder[]): SequenceProblem {
   const { costs } = problem;
-  const coordinator = need(problem.coordinators.find(({ id }) => id === slot.coordinatorId), `coordinator ${slot.coordinatorId}`);
-  const counter = need(problem.counters.find(({ id }) => id === slot.counterId), `counter ${slot.counterId}`);
+  const coordinator = need(
+    problem.coordinators.find(({ id }) => id === slot.coordinatorId),
+    `coordinator ${slot.coordinatorId}`,
+  );
+  const counter = need(
+    problem.counters.find(({ id }) => id === slot.counterId),
+    `counter ${slot.counterId}`,
+  );
   const leg = (a: Point, b: Point): SequenceLeg => {
     const road = estimateLeg(a, b, costs.circuity);
-    return { minutes: road.minutes, cents: legCents(road, coordinator.centsPerMile, costs.driverMinuteCents) };
+    return {
+      minutes: road.minutes,
+      cents: legCents(road, coordinator.centsPerMile, costs.driverMinuteCents),
+    };
   };
   return {
     stops: stops.map((stop) => ({
-      openMinute: stop.windowOpenMinute, closeMinute: stop.windowCloseMinute, serviceMinutes: stop.serviceMinutes,
-      fromStart: leg(coordinator, stop), toEnd: leg(stop, counter),
+      openMinute: stop.windowOpenMinute,
+      closeMinute: stop.windowCloseMinute,
+      serviceMinutes: stop.serviceMinutes,
+      fromStart: leg(coordinator, stop),
+      toEnd: leg(stop, counter),
     })),
     between: stops.map((a) => stops.map((b) => leg(a, b))),
     earliestDepartMinute: problem.earliestMinutes[slot.date] ?? 0,
@@ -92,8 +121,11 @@ function frameKey(problem: PoolProblem, slot: Slot): string | null {
 }
 
 function breedersOf(problem: PoolProblem, counterId: number): number[] {
-  const ids = new Set(problem.parcels.filter((parcel) => parcel.counterId === counterId).map(({ breederId }) => breederId));
-  for (const run of problem.fixedRuns) if (run.counterId === counterId) for (const id of run.breederIds) ids.add(id);
+  const ids = new Set(
+    problem.parcels.filter((parcel) => parcel.counterId === counterId).map(({ breederId }) => breederId),
+  );
+  for (const run of problem.fixedRuns)
+    if (run.counterId === counterId) for (const id of run.breederIds) ids.add(id);
   return [...ids].sort((a, b) => a - b);
 }
 
@@ -110,4 +142,3 @@ function need<T>(value: T | null | undefined, what: string): T {
   if (value == null) throw new RangeError(`The problem has no ${what}.`);
   return value;
 }
-

@@ -120,8 +120,14 @@ function flatten(problem: SequenceProblem): Flat {
 
 function emptyLabels(size: number): Labels {
   return {
-    cents: new Float64Array(size), spent: new Float64Array(size), ready: new Float64Array(size), latest: new Float64Array(size),
-    parent: new Int32Array(size), next: new Int32Array(size), last: new Uint8Array(size), count: 0,
+    cents: new Float64Array(size),
+    spent: new Float64Array(size),
+    ready: new Float64Array(size),
+    latest: new Float64Array(size),
+    parent: new Int32Array(size),
+    next: new Int32Array(size),
+    last: new Uint8Array(size),
+    count: 0,
   };
 }
 
@@ -139,10 +145,28 @@ function start(problem: SequenceProblem, labels: Labels, head: Int32Array, j: nu
   const earliest = problem.earliestDepartMinute;
   if (earliest + minutes > stop.closeMinute) return;
   const ready = Math.max(stop.openMinute, earliest + minutes) + stop.serviceMinutes;
-  insert(problem, labels, head, ((1 << j) * problem.stops.length + j), j, -1, cents, minutes + stop.serviceMinutes, ready, stop.closeMinute - minutes);
+  insert(
+    problem,
+    labels,
+    head,
+    (1 << j) * problem.stops.length + j,
+    j,
+    -1,
+    cents,
+    minutes + stop.serviceMinutes,
+    ready,
+    stop.closeMinute - minutes,
+  );
 }
 
-function extend(problem: SequenceProblem, flat: Flat, labels: Labels, head: Int32Array, mask: number, at: number): void {
+function extend(
+  problem: SequenceProblem,
+  flat: Flat,
+  labels: Labels,
+  head: Int32Array,
+  mask: number,
+  at: number,
+): void {
   const n = flat.open.length;
   const from = labels.last[at] as number;
   const spent = labels.spent[at] as number;
@@ -158,7 +182,12 @@ function extend(problem: SequenceProblem, flat: Flat, labels: Labels, head: Int3
     const service = flat.service[k] as number;
     const open = flat.open[k] as number;
     insert(
-      problem, labels, head, (mask | (1 << k)) * n + k, k, at,
+      problem,
+      labels,
+      head,
+      (mask | (1 << k)) * n + k,
+      k,
+      at,
       cents + (flat.cents[from * n + k] as number),
       spent + minutes + service,
       (arrive > open ? arrive : open) + service,
@@ -168,16 +197,27 @@ function extend(problem: SequenceProblem, flat: Flat, labels: Labels, head: Int3
 }
 
 function insert(
-  problem: SequenceProblem, labels: Labels, head: Int32Array, state: number, last: number, parent: number,
-  cents: number, spent: number, ready: number, latest: number,
+  problem: SequenceProblem,
+  labels: Labels,
+  head: Int32Array,
+  state: number,
+  last: number,
+  parent: number,
+  cents: number,
+  spent: number,
+  ready: number,
+  latest: number,
 ): void {
   // What is late already stays late, and what is long already stays long, whatever follows.
   if (latest < problem.earliestDepartMinute || ready > problem.latestArriveMinute) return;
   if (spent > problem.longestMinutes || ready - latest > problem.longestMinutes) return;
   let before = -1;
-  for (let at = head[state] as number; at !== -1; ) {
+  for (let at = head[state] as number; at !== -1;) {
     const following = labels.next[at] as number;
-    const c = labels.cents[at] as number, s = labels.spent[at] as number, r = labels.ready[at] as number, l = labels.latest[at] as number;
+    const c = labels.cents[at] as number,
+      s = labels.spent[at] as number,
+      r = labels.ready[at] as number,
+      l = labels.latest[at] as number;
     if (c <= cents && s <= spent && r <= ready && l >= latest) return;
     if (cents <= c && spent <= s && ready <= r && latest >= l) {
       if (before === -1) head[state] = following;
@@ -202,7 +242,10 @@ const endLeg = (problem: SequenceProblem, labels: Labels, at: number): SequenceL
 
 function latestDeparture(problem: SequenceProblem, labels: Labels, at: number): number {
   const { minutes } = endLeg(problem, labels, at);
-  return Math.min(labels.latest[at] as number, problem.latestArriveMinute - (labels.spent[at] as number) - minutes);
+  return Math.min(
+    labels.latest[at] as number,
+    problem.latestArriveMinute - (labels.spent[at] as number) - minutes,
+  );
 }
 
 /** The cheapest label of a set that still reaches the end in time; the shorter run, then the later departure, on a tie. */

@@ -24,7 +24,11 @@ export interface Timeline {
 
 /** Drives the stops in the given order from a given departure, waiting where a window is not open yet. */
 export function timeline(
-  coordinator: PoolCoordinator, stops: readonly PoolBreeder[], counter: PoolCounter, departMinute: number, circuity: number,
+  coordinator: PoolCoordinator,
+  stops: readonly PoolBreeder[],
+  counter: PoolCounter,
+  departMinute: number,
+  circuity: number,
 ): Timeline {
   let here: { lat: number; lon: number } = coordinator;
   let minute = departMinute;
@@ -38,11 +42,22 @@ export function timeline(
     here = stop;
     driveMinutes += leg.minutes;
     miles += leg.miles;
-    return { breederId: stop.id, arriveMinute, leaveMinute: minute, waitMinutes, driveMinutes: leg.minutes, miles: leg.miles };
+    return {
+      breederId: stop.id,
+      arriveMinute,
+      leaveMinute: minute,
+      waitMinutes,
+      driveMinutes: leg.minutes,
+      miles: leg.miles,
+    };
   });
   const last = estimateLeg(here, counter, circuity);
   return {
-    departMinute, stops: timed, arriveMinute: minute + last.minutes,
-    driveMinutes: driveMinutes + last.minutes, miles: miles + last.miles, lastLegMinutes: last.minutes,
+    departMinute,
+    stops: timed,
+    arriveMinute: minute + last.minutes,
+    driveMinutes: driveMinutes + last.minutes,
+    miles: miles + last.miles,
+    lastLegMinutes: last.minutes,
   };
 }
