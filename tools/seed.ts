@@ -1,5 +1,5 @@
 import { pathToFileURL } from 'node:url';
-import { mkdirSync } from 'node:fs';
+import { mkdirSync, renameSync, rmSync } from 'node:fs';
 import { dirname } from 'node:path';
 import { pino } from 'pino';
 import { createClock } from '../api/src/clock';
@@ -12,19 +12,23 @@ import { demoEnvironment, isDemo, readEnvironment, type Environment } from './en
 import { startFakes } from './fakes';
 import { buildServer } from './build';
 
-/** Seeds the demo circle into a database without people; answers whether it did. The forecast service must be up. */
+/**
+ * Seeds the demo circle into a database without people; answers whether it did. The forecast service must be up. The circle
+ * is made in a file of its own and put in place whole: a seed that was interrupted leaves nothing half-done.
+ */
 export async function seed(env: Environment): Promise<boolean> {
-  return withSite(env, async (deps) => {
-    if (await deps.db('people').first('id')) return false;
-    try {
-      await seedDemo(deps);
-    } catch (error) {
-      // Half a circle would never be filled up: the next start must find nothing and begin again.
-      await emptyAll(deps);
-      throw error;
-    }
-    return true;
-  });
+  const file = readConfig(env).DATABASE_FILE;
+  if (await withSite(env, async ({ db }) => (await db('people').first('id')) !== undefined)) return false;
+  const unfinished = `${file}.unfinished`;
+  removeDatabase(unfinished);
+  await withSite({ ...env, DATABASE_FILE: unfinished }, seedDemo);
+  removeDatabase(file);
+  renameSync(unfinished, file);
+  return true;
+}
+
+function removeDatabase(file: string): void {
+  for (const suffix of ['', '-wal', '-shm']) rmSync(`${file}${suffix}`, { force: true });
 }
 
 async function withSite<T>(env: Environment, work: (deps: Deps) => Promise<T>): Promise<T> {
@@ -44,13 +48,6 @@ async function withSite<T>(env: Environment, work: (deps: Deps) => Promise<T>): 
   } finally {
     await db.destroy();
   }
-}
-
-async function emptyAll({ db }: Deps): Promise<void> {
-  const tables = (await db('sqlite_master').where({ type: 'table' }).pluck('name')) as string[];
-  await db.raw('PRAGMA foreign_keys = OFF');
-  for (const table of tables) if (!/^(knex|sqlite)_/.test(table)) await db(table).del();
-  await db.raw('PRAGMA foreign_keys = ON');
 }
 
 /** `npm run seed` (demo) or `npm run seed -- --admin you@example.org "Your Name" [--carrier "Name" ZIP-of-its-sort-hub]`. */

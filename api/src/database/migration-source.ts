@@ -7,6 +7,7 @@ import * as createForecasts from '../../../migrations/20261201090400_create_fore
 import * as createParcels from '../../../migrations/20261201090500_create_parcels';
 import * as createRuns from '../../../migrations/20261201090600_create_runs';
 import * as createNotices from '../../../migrations/20261201090700_create_notices';
+import * as guardHistory from '../../../migrations/20261201090800_guard_history';
 
 interface Migration {
   readonly name: string;
@@ -24,6 +25,7 @@ const registry: readonly Migration[] = [
   { name: '20261201090500_create_parcels', ...createParcels },
   { name: '20261201090600_create_runs', ...createRuns },
   { name: '20261201090700_create_notices', ...createNotices },
+  { name: '20261201090800_guard_history', ...guardHistory },
 ];
 
 /**
