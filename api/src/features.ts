@@ -1,4 +1,5 @@
 import { arrivalsRoutes } from './arrivals/arrivals-routes';
+import { calendarsRoutes } from './calendars/calendars-routes';
 import type { Deps } from './deps';
 import { deskRoutes } from './desk/desk-routes';
 import type { AnyRoute } from './http/route';
@@ -22,5 +23,6 @@ export function allRoutes(deps: Deps): readonly AnyRoute[] {
     ...daysRoutes(deps),
     ...blackoutsRoutes(deps),
     ...deskRoutes(deps),
+    ...calendarsRoutes(deps),
   ];
 }

@@ -1,6 +1,7 @@
 import { createArrivalsService, type ArrivalsService } from './arrivals/arrivals-service';
 import { createBlackoutsService, type BlackoutsService } from './blackouts/blackouts-service';
 import { createDaysService, type DaysService } from './days/days-service';
+import { createCalendarsService, type CalendarsService } from './calendars/calendars-service';
 import type { Deps } from './deps';
 import { createDeskService, type DeskService } from './desk/desk-service';
 import { createForecastsService, type ForecastsService } from './forecasts/forecasts-service';
@@ -18,6 +19,7 @@ import { createSessionService, type SessionService } from './session/session-ser
 export interface Services {
   readonly arrivals: ArrivalsService;
   readonly blackouts: BlackoutsService;
+  readonly calendars: CalendarsService;
   readonly days: DaysService;
   readonly desk: DeskService;
   readonly forecasts: ForecastsService;
@@ -35,6 +37,7 @@ export interface Services {
 const makers: { readonly [K in keyof Services]: (deps: Deps) => Services[K] } = {
   arrivals: createArrivalsService,
   blackouts: createBlackoutsService,
+  calendars: createCalendarsService,
   days: createDaysService,
   desk: createDeskService,
   forecasts: createForecastsService,

@@ -27,7 +27,7 @@ export function openApi(routes: readonly AnyRoute[], version: string): object {
 }
 
 function operation(spec: AnyRoute): object {
-  const success = String(spec.status ?? (spec.response ? 200 : 204));
+  const success = String(spec.status ?? (spec.response || spec.textType ? 200 : 204));
   return {
     summary: spec.summary,
     'x-allow': spec.allow,
@@ -38,6 +38,7 @@ function operation(spec: AnyRoute): object {
       [success]: {
         description: 'Done',
         ...(spec.response ? { content: json(schemaOf(spec.response, 'output')) } : {}),
+        ...(spec.textType ? { content: { [spec.textType]: { schema: { type: 'string' } } } } : {}),
       },
       default: {
         description: 'A problem',

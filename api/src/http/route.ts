@@ -23,7 +23,8 @@ export interface Call<A extends Allow, P, Q, B> {
 
 /**
  * A declared route. `response` is the schema of the JSON answer, null for 204; an answer with a `version` also gets an
- * ETag. A route without `allow` does not compile. `raw: true` leaves writing the answer to the handler.
+ * ETag. A route without `allow` does not compile. `raw: true` leaves writing the answer to the handler; `textType` names
+ * the media type of an answer that is text, which the handler then returns (with `response: null`).
  */
 export interface RouteSpec<A extends Allow, P, Q, B, R> {
   readonly method: 'get' | 'post' | 'put' | 'patch' | 'delete';
@@ -37,6 +38,7 @@ export interface RouteSpec<A extends Allow, P, Q, B, R> {
   readonly response: R;
   readonly status?: number;
   readonly raw?: boolean;
+  readonly textType?: `text/${string}`;
   readonly handler: (
     call: Call<A, P, Q, B>,
   ) => Promise<R extends z.ZodType ? z.input<R> : unknown> | (R extends z.ZodType ? z.input<R> : unknown);

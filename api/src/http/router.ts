@@ -32,6 +32,13 @@ function handle(spec: AnyRoute, checkAnswers: boolean): RequestHandler {
       res,
     } as never);
     if (spec.raw) return;
+    if (spec.textType) {
+      res
+        .status(spec.status ?? 200)
+        .type(`${spec.textType}; charset=utf-8`)
+        .send(answer);
+      return;
+    }
     if (spec.response === null) {
       res.status(spec.status ?? 204).end();
       return;

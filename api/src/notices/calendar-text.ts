@@ -45,20 +45,39 @@ export interface CalendarEntry {
  * One iTIP message (RFC 5546) with a VTIMEZONE for each TZID, CRLF lines of at most 75 octets. CANCEL carries
  * STATUS:CANCELLED and no alarm.
  */
-export function calendarText(
-  method: 'REQUEST' | 'CANCEL' | 'PUBLISH',
-  entries: readonly CalendarEntry[],
-  name?: string,
-): string {
-  const calendar = ical({
+export function calendarText(method: 'REQUEST' | 'CANCEL', entry: CalendarEntry): string {
+  const calendar = emptyCalendar(method);
+  addEvent(calendar, entry, method === 'CANCEL');
+  return `${calendar.toString()}\r\n`;
+}
+
+export interface PublishOptions {
+  readonly name?: string;
+  /** How long a calendar may wait before it looks again (RFC 7986 5.7). */
+  readonly lookAgainSeconds?: number;
+  /** The zone that a calendar without events names: RFC 5545 3.6 asks for one component at least. */
+  readonly zone: string;
+}
+
+/** Events to subscribe to or to save: METHOD:PUBLISH (RFC 5546 3.2.1), nobody invited. */
+export function publishedCalendar(entries: readonly CalendarEntry[], options: PublishOptions): string {
+  const calendar = emptyCalendar('PUBLISH');
+  if (options.name !== undefined) calendar.name(oneLine(options.name));
+  if (options.lookAgainSeconds !== undefined) calendar.ttl(options.lookAgainSeconds);
+  for (const entry of entries) addEvent(calendar, entry, false);
+  const text = `${calendar.toString()}\r\n`;
+  if (entries.length > 0) return text;
+  const zone = timeZoneBlock(options.zone) ?? timeZoneBlock('America/Chicago') ?? '';
+  return text.replace('END:VCALENDAR', () => `${zone.trimEnd()}\r\nEND:VCALENDAR`);
+}
+
+function emptyCalendar(method: keyof typeof ICalCalendarMethod): ICalCalendar {
+  return ical({
     prodId: { company: 'Dayberth', product: 'Dayberth', language: 'EN' },
     method: ICalCalendarMethod[method],
-    ...(name === undefined ? {} : { name }),
     // A zone for the whole calendar would make DTSTAMP local time; RFC 5545 3.8.7.2 wants it in UTC.
     timezone: { name: null, generator: timeZoneBlock },
   });
-  for (const entry of entries) addEvent(calendar, entry, method === 'CANCEL');
-  return `${calendar.toString()}\r\n`;
 }
 
 function addEvent(calendar: ICalCalendar, entry: CalendarEntry, cancelled: boolean): void {

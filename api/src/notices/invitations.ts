@@ -78,7 +78,7 @@ async function write(
     updatedAt,
   });
   const entry = { uid, sequence, stamp: updatedAt, event, organizer: sender(config), attendee: person };
-  return { uid, sequence, method, text: calendarText(method, [entry]), isNew, event };
+  return { uid, sequence, method, text: calendarText(method, entry), isNew, event };
 }
 
 /**

@@ -1,19 +1,20 @@
 import { notFound } from '@shared/errors';
 import type { Deps } from '../deps';
 import { mailWaits } from './mail-wake';
+import { standingInvitations, type Invitation } from './invitation-queries';
 import { countMails, failedMails, requeueMail } from './outbox-queries';
 import { drainOutbox } from './outbox';
 import {
   accountLink,
-  buyerSpoke,
-  leftTheRun,
+  arrivalReported,
+  morningsSaid,
   parcelBooked,
+  parcelCancelled,
   parcelCreated,
-  parcelOff,
-  runCalledOff,
-  runHandedOver,
-  runPlanned,
-} from './tell-event';
+  parcelOnHold,
+} from './tell-parcel';
+import { leftTheRun, runCalledOff, runHandedOver, runPlanned } from './tell-run';
+import { tokenOf } from './write-mail';
 
 /** What happened, in the words of the service it happened in. The notices feature decides whom it concerns and writes the mails. */
 export type NoticeEvent =
@@ -23,7 +24,13 @@ export type NoticeEvent =
   | { kind: 'parcel-on-hold'; parcelId: number; reason: string; shipDate: string | null }
   | { kind: 'parcel-cancelled'; parcelId: number; shipDate: string | null }
   | { kind: 'run-confirmed'; runId: number }
-  | { kind: 'run-changed'; runId: number; removedParcelIds: readonly number[]; addedParcelIds: readonly number[]; why: string }
+  | {
+      kind: 'run-changed';
+      runId: number;
+      removedParcelIds: readonly number[];
+      addedParcelIds: readonly number[];
+      why: string;
+    }
   | { kind: 'run-called-off'; runId: number; parcelIds: readonly number[]; reason: string }
   | { kind: 'run-handed-over'; runId: number }
   | { kind: 'mornings-said'; parcelId: number }
@@ -39,6 +46,8 @@ export interface NoticesService {
   drain(): Promise<{ sent: number; failed: number }>;
   queue(): Promise<{ waiting: number; failed: number }>;
   failedMail(): Promise<{ id: number; to: string; subject: string; error: string; at: string }[]>;
+  /** What stands in a person's calendar at present. */
+  standing(personId: number): Promise<Invitation[]>;
   /** Puts a failed mail back into the queue. Throws 404. */
   resend(id: number): Promise<void>;
 }
@@ -56,8 +65,9 @@ export function createNoticesService(deps: Deps): NoticesService {
         case 'parcel-booked':
           return parcelBooked(deps, await services.parcels.get(event.parcelId));
         case 'parcel-on-hold':
+          return parcelOnHold(deps, await services.parcels.get(event.parcelId), event);
         case 'parcel-cancelled':
-          return parcelOff(deps, await services.parcels.get(event.parcelId), event);
+          return parcelCancelled(deps, await services.parcels.get(event.parcelId));
         case 'run-confirmed':
           return runPlanned(deps, await services.runs.get(event.runId), null);
         case 'run-changed': {
@@ -70,13 +80,17 @@ export function createNoticesService(deps: Deps): NoticesService {
         case 'run-handed-over':
           return runHandedOver(deps, await services.runs.get(event.runId));
         case 'mornings-said':
-        case 'arrival-reported':
-          return buyerSpoke(deps, await services.parcels.get(event.parcelId), event.kind);
+          return morningsSaid(deps, await services.parcels.get(event.parcelId));
+        case 'arrival-reported': {
+          const parcel = await services.parcels.get(event.parcelId);
+          return arrivalReported(deps, parcel, tokenOf(parcel));
+        }
       }
     },
     drain: () => drainOutbox(deps),
     queue: () => countMails(db),
     failedMail: () => failedMails(db, 100),
+    standing: (personId) => standingInvitations(db, personId),
     async resend(id) {
       if (!(await requeueMail(db, id, clock.nowIso()))) throw notFound('That failed mail');
       deps.afterCommit(() => mailWaits(deps.config));

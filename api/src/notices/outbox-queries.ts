@@ -92,10 +92,11 @@ export async function claimMails(
     .orWhere((q) => void stale(q as Knex.QueryBuilder<OutboxRow>))
     .orderBy([{ column: 'next_attempt_at' }, { column: 'id' }])
     .limit(limits.count);
-  const rows = (await db<OutboxRow>('outbox')
+  const attempts = db.raw('attempts + 1') as unknown as number;
+  const rows: OutboxRow[] = await db<OutboxRow>('outbox')
     .whereIn('id', due)
-    .update({ state: 'sending', claimed_at: now, attempts: db.raw('attempts + 1') as unknown as number })
-    .returning('*')) as OutboxRow[];
+    .update({ state: 'sending', claimed_at: now, attempts })
+    .returning('*');
   return rows.toSorted((a, b) => a.id - b.id).map((row) => ({ ...toMail(row), claimedAt: now }));
 }
 
@@ -128,40 +129,36 @@ export async function settleMail(db: Knex, mail: ClaimedMail, outcome: Outcome):
     .update({
       state: outcome.state,
       claimed_at: null,
-      ...(outcome.state === 'sent' ? { sent_at: outcome.at, last_error: null } : { last_error: outcome.error }),
+      ...(outcome.state === 'sent'
+        ? { sent_at: outcome.at, last_error: null }
+        : { last_error: outcome.error }),
       ...(outcome.state === 'waiting' ? { next_attempt_at: outcome.nextAttemptAt } : {}),
     });
 }
 
-const neverTried = (db: Knex, keyPrefix: string) =>
-  db<OutboxRow>('outbox')
-    .where({ state: 'waiting', attempts: 0 })
-    .whereRaw('substr(idempotency_key, 1, ?) = ?', [keyPrefix.length, keyPrefix]);
-
-/** Takes mails back that nobody has tried to send, by the beginning of their key; answers their calendar parts. */
-export async function takeBackMails(db: Knex, keyPrefix: string): Promise<CalendarPart[]> {
-  const rows = await neverTried(db, keyPrefix).orderBy('id');
+/**
+ * Takes mails back that nobody has tried to send and that take an event out of a calendar, by the end of their key; answers
+ * their calendar parts in their order.
+ */
+export async function takeBackMails(db: Knex, keyEnd: string): Promise<CalendarPart[]> {
+  const rows = await db<OutboxRow>('outbox')
+    .where({ state: 'waiting', attempts: 0, ical_method: 'CANCEL' })
+    .whereRaw('substr(idempotency_key, -?) = ?', [keyEnd.length, keyEnd])
+    .orderBy('id');
   if (rows.length === 0) return [];
-  await db('outbox').whereIn('id', rows.map((row) => row.id)).del();
+  await db('outbox')
+    .whereIn(
+      'id',
+      rows.map((row) => row.id),
+    )
+    .del();
   return rows.flatMap((row) => toMail(row).calendar ?? []);
 }
 
-/** Puts a calendar part into a mail that nobody has tried to send and that has none; says whether there was one. */
-export async function addCalendarPart(db: Knex, keyPrefix: string, part: CalendarPart): Promise<boolean> {
-  const row = await neverTried(db, keyPrefix).whereNull('ical').first();
-  if (!row) return false;
-  await db<OutboxRow>('outbox').where({ id: row.id }).update({ ical: part.text, ical_method: part.method });
-  return true;
-}
-
 export async function countMails(db: Knex): Promise<{ waiting: number; failed: number }> {
-  const rows = (await db<OutboxRow>('outbox')
-    .whereNot('state', 'sent')
-    .groupBy('state')
-    .select('state')
-    .count({ n: '*' })) as { state: OutboxRow['state']; n: number }[];
-  const of = (state: OutboxRow['state']) => Number(rows.find((row) => row.state === state)?.n ?? 0);
-  return { waiting: of('waiting') + of('sending'), failed: of('failed') };
+  const rows = await db<OutboxRow>('outbox').whereNot('state', 'sent').select('state');
+  const failed = rows.filter((row) => row.state === 'failed').length;
+  return { waiting: rows.length - failed, failed };
 }
 
 export interface FailedMail {

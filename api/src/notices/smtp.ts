@@ -7,7 +7,12 @@ import { oneLine } from './words';
 /** How a sending ended. `permanent`: trying again cannot help; `unreachable`: neither would any other mail get through. */
 export type SendResult =
   | { readonly ok: true }
-  | { readonly ok: false; readonly error: string; readonly permanent: boolean; readonly unreachable: boolean };
+  | {
+      readonly ok: false;
+      readonly error: string;
+      readonly permanent: boolean;
+      readonly unreachable: boolean;
+    };
 
 export interface MailSender {
   send(mail: OutboxMail): Promise<SendResult>;
@@ -76,14 +81,22 @@ function failure(thrown: unknown): SendResult {
   // about this mail; a refused sign-in or sender is a setting that somebody may correct.
   const refused = responseCode !== undefined && responseCode >= 500 && responseCode < 600;
   const aboutThisMail = command === 'RCPT TO' || command === 'DATA' || code === 'EMESSAGE';
-  const unreachable = code === 'ECONNECTION' || code === 'EDNS' || code === 'ETIMEDOUT' || code === 'ESOCKET' || code === 'EAUTH';
+  const unreachable =
+    code === 'ECONNECTION' ||
+    code === 'EDNS' ||
+    code === 'ETIMEDOUT' ||
+    code === 'ESOCKET' ||
+    code === 'EAUTH';
   return { ok: false, error, permanent: refused && aboutThisMail, unreachable };
 }
 
 async function withDeadline<T>(work: Promise<T>): Promise<T> {
   let timer: NodeJS.Timeout | undefined;
   const late = new Promise<never>((_, reject) => {
-    timer = setTimeout(() => reject(Object.assign(new Error('The mail host took too long.'), { code: 'ETIMEDOUT' })), deadlineMs);
+    timer = setTimeout(
+      () => reject(Object.assign(new Error('The mail host took too long.'), { code: 'ETIMEDOUT' })),
+      deadlineMs,
+    );
   });
   try {
     return await Promise.race([work, late]);

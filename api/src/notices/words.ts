@@ -35,13 +35,16 @@ export const dayAfter = (date: string): string =>
 /** `minute` after midnight of `date` on the clock of `zone`, as UTC ISO text; a skipped hour moves on with the clock. */
 export function instantAt(date: string, minute: number, zone: string): string {
   const midnight = DateTime.fromISO(date, { zone });
-  return midnight.set({ hour: Math.floor(minute / 60), minute: minute % 60 }).toUTC().toISO() ?? '';
+  return (
+    midnight
+      .set({ hour: Math.floor(minute / 60), minute: minute % 60 })
+      .toUTC()
+      .toISO() ?? ''
+  );
 }
 
 /** What is in a box in a few words: "corn snake", "2 × crested gecko and corn snake". */
-export const contentsInWords = (
-  contents: readonly { quantity: number; commonName: string }[],
-): string =>
+export const contentsInWords = (contents: readonly { quantity: number; commonName: string }[]): string =>
   contents.map((c) => (c.quantity === 1 ? c.commonName : `${c.quantity} × ${c.commonName}`)).join(' and ');
 
 /** One line without control characters (line breaks forge mail headers), runs of space joined. */

@@ -1,7 +1,10 @@
-import type { KeptMail } from './mail-fake';
+import type { KeptMail } from './kept-mail';
 
 const e = (text: string) =>
-  text.replace(/[&<>"']/g, (sign) => ({ '&': '&amp;', '<': '&lt;', '>': '&gt;', '"': '&quot;', "'": '&#39;' })[sign] ?? sign);
+  text.replace(
+    /[&<>"']/g,
+    (sign) => ({ '&': '&amp;', '<': '&lt;', '>': '&gt;', '"': '&quot;', "'": '&#39;' })[sign] ?? sign,
+  );
 
 export const stylesheet = `
 :root{--ink:#1d2b36;--ink-2:#51606b;--juniper:#1f6f68;--oat:#f6f1e7;--paper:#fffdf8;--line:#ddd5c4}
@@ -23,9 +26,14 @@ const page = (title: string, body: string) =>
 /** The list, newest first; `chosen` is the recipient it is narrowed to, empty for everybody. */
 export function listPage(shown: readonly KeptMail[], all: readonly KeptMail[], chosen: string): string {
   const people = [...new Set(all.flatMap((mail) => mail.to))].sort();
-  const options = people.map((one) => `<option${one === chosen ? ' selected' : ''}>${e(one)}</option>`).join('');
+  const options = people
+    .map((one) => `<option${one === chosen ? ' selected' : ''}>${e(one)}</option>`)
+    .join('');
   const items = shown
-    .map((mail) => `<li><a href="/mail/${mail.id}">${e(mail.subject || '(no subject)')}</a><small>to ${e(mail.to.join(', '))}${mail.calendar ? ', with a calendar invitation' : ''}</small></li>`)
+    .map(
+      (mail) =>
+        `<li><a href="/mail/${mail.id}">${e(mail.subject || '(no subject)')}</a><small>to ${e(mail.to.join(', '))}${mail.calendar ? ', with a calendar invitation' : ''}</small></li>`,
+    )
     .join('');
   return page(
     'Demo mailbox',

@@ -4,7 +4,10 @@ import { createMailFake } from './mail-fake';
 async function main(): Promise<void> {
   const fake = createMailFake();
   const port = (name: string) => Number(process.env[name] ?? 0);
-  const { smtpUrl, httpUrl } = await fake.listen({ smtpPort: port('MAIL_FAKE_SMTP_PORT'), httpPort: port('MAIL_FAKE_HTTP_PORT') });
+  const { smtpUrl, httpUrl } = await fake.listen({
+    smtpPort: port('MAIL_FAKE_SMTP_PORT'),
+    httpPort: port('MAIL_FAKE_HTTP_PORT'),
+  });
   process.stdout.write(`mail fake listening on ${smtpUrl} and ${httpUrl}\n`);
   const stop = () => void fake.close().then(() => process.exit(0));
   process.on('SIGTERM', stop);
