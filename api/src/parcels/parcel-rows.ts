@@ -32,7 +32,7 @@ export interface ParcelRow {
   share_cents: number | null;
   tracking_number: string | null;
   arrival_token: string;
-  report_outcome: string | null;
+  report_outcome: NonNullable<Parcel['report']>['outcome'] | null;
   report_text: string | null;
   report_at: string | null;
   note: string;
@@ -151,6 +151,7 @@ export function toParcel(row: JoinedRow, parts: ParcelParts, publicUrl: string):
     arrivalUrl: `${publicUrl.replace(/\/$/, '')}/arrival/${row.arrival_token}`,
     mornings: (parts.mornings.get(row.id) ?? []).map(({ date, suits }) => ({ date, suits: Boolean(suits) })),
     note: row.note,
+    report: reportOf(row),
     bookedVerdict:
       verdict && verdict.ship_date === row.ship_date ? (JSON.parse(verdict.verdict) as DayVerdict) : null,
     createdAt: row.created_at,
@@ -179,4 +180,9 @@ function destinationOf(row: JoinedRow): Parcel['destination'] {
     postalCode: row.hold_postal_code ?? '',
     zone: row.hold_zone ?? '',
   };
+}
+
+function reportOf(row: ParcelRow): Parcel['report'] {
+  if (row.report_outcome === null || row.report_at === null) return null;
+  return { outcome: row.report_outcome, text: row.report_text ?? '', at: row.report_at };
 }

@@ -134,6 +134,14 @@ export const parcel = z.object({
   arrivalUrl: z.string(),
   mornings: z.array(z.object({ date: plainDate, suits: z.boolean() })),
   note: z.string(),
+  /** What the buyer reported of the arrival; null until then. */
+  report: z
+    .object({
+      outcome: z.enum(['arrived-well', 'arrived-weak', 'doa', 'not-arrived']),
+      text: z.string(),
+      at: instant,
+    })
+    .nullable(),
   /** The verdict it was booked on, as it stood then. */
   bookedVerdict: dayVerdict.nullable(),
   createdAt: instant,

@@ -134,6 +134,7 @@ export function sampleParcel(over: Partial<Parcel> = {}): Parcel {
     arrivalUrl: 'https://dayberth.example.org/arrival/x',
     mornings: [],
     note: '',
+    report: null,
     bookedVerdict: null,
     createdAt: '2026-12-01T12:00:00.000Z',
     updatedAt: '2026-12-01T12:00:00.000Z',
