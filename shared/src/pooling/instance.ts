@@ -36,13 +36,13 @@ export interface Instance {
  * problem with the same people, places and costs may be handed on, for its answers are kept.
  */
 export function createInstance(problem: PoolProblem, pricer = createRunPricer(problem)): Instance {
-  const slots = slotsOf(problem);
+  const slots = slotsOf(problem, pricer);
   const options = problem.parcels.map((_, index) =>
     slots
       .filter((slot) => slot.eligible.includes(index))
       .map((slot) => ({ slot: slot.index, penaltyCents: penalty(problem, index, slot.date) })),
   );
-  const base = slots.map((slot) => (slot.fixed ? fixedCents(pricer, slot, slot.fixed) : 0));
+  const base = slots.map((slot) => (slot.fixed ? (fixedCents(pricer, slot, slot.fixed) ?? 0) : 0));
   return {
     problem,
     parcels: problem.parcels,
@@ -64,15 +64,14 @@ export function createInstance(problem: PoolProblem, pricer = createRunPricer(pr
   };
 }
 
-const fixedCents = (pricer: RunPricer, slot: SlotInfo, fixed: FixedRun): number =>
-  fixed.breederIds.length === 0
-    ? 0
-    : (pricer.price(slot, fixed.breederIds) ?? pricer.relaxed(slot, fixed.breederIds)).drivingCents;
+/** What a decided run costs as it stands; null when it cannot be driven like that, and so can take nothing more. */
+const fixedCents = (pricer: RunPricer, slot: Slot, fixed: FixedRun): number | null =>
+  fixed.breederIds.length === 0 ? 0 : (pricer.price(slot, fixed.breederIds)?.drivingCents ?? null);
 
 const penalty = (problem: PoolProblem, parcel: number, date: string): number =>
   problem.parcels[parcel]?.days.find((day) => day.date === date)?.penaltyCents ?? 0;
 
-function slotsOf(problem: PoolProblem): SlotInfo[] {
+function slotsOf(problem: PoolProblem, pricer: RunPricer): SlotInfo[] {
   const fixedBy = new Map(problem.fixedRuns.map((run) => [`${run.coordinatorId}|${run.date}`, run]));
   const dates = [...new Set(problem.parcels.flatMap(({ days }) => days.map(({ date }) => date)))].sort();
   const found: SlotInfo[] = [];
@@ -87,6 +86,7 @@ function slotsOf(problem: PoolProblem): SlotInfo[] {
           : coordinator.freeDates.includes(date);
         if (!drives) continue;
         if (counter.cutOffMinutes[date] === undefined) continue;
+        if (fixed && fixedCents(pricer, slot, fixed) === null) continue;
         const roomL = coordinator.capacityL - (fixed?.volumeL ?? 0);
         const eligible = problem.parcels.flatMap((parcel, index) =>
           mayRide(problem, parcel, slot, roomL) ? [index] : [],

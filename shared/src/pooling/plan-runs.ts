@@ -81,7 +81,7 @@ export function planOf(instance: Instance, placement: Placement): Plan {
     const added = breedersIn(instance, placement, slot);
     if (added.length === 0) return [];
     const ids = [...new Set([...(slot.fixed?.breederIds ?? []), ...added])];
-    const run = instance.pricer.price(slot, ids) ?? (slot.fixed ? instance.pricer.relaxed(slot, ids) : null);
+    const run = instance.pricer.price(slot, ids);
     if (!run)
       throw new Error(`The run of coordinator ${slot.coordinatorId} on ${slot.date} cannot be driven.`);
     const fixedCents = slot.fixed ? 0 : instance.problem.costs.runFixedCents;
