@@ -107,9 +107,14 @@ const boxShape = {
 /** Outer sizes in inches; `volumeL` is what the box takes up in a vehicle, in litres. */
 export const box = z.object({ id, ...boxShape, volumeL: z.number(), version });
 export type Box = z.infer<typeof box>;
-export const boxNew = z.object(boxShape);
+export const boxNew = z
+  .object(boxShape)
+  .refine((size) => 2 * size.foamIn < Math.min(size.lengthIn, size.widthIn, size.heightIn), {
+    path: ['foamIn'],
+    message: 'Foam this thick leaves no room inside.',
+  });
 export type BoxNew = z.infer<typeof boxNew>;
-export const boxPatch = boxNew.partial();
+export const boxPatch = z.object(boxShape).partial();
 export type BoxPatch = z.infer<typeof boxPatch>;
 
 /** `GET /api/postal-codes/:postalCode`: where a ZIP is, and the nearest hold counters by distance. */
