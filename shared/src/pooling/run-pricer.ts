@@ -126,7 +126,8 @@ function breedersOf(problem: PoolProblem, counterId: number): number[] {
   );
   for (const run of problem.fixedRuns)
     if (run.counterId === counterId) for (const id of run.breederIds) ids.add(id);
-  return [...ids].sort((a, b) => a - b);
+  const known = new Set(problem.breeders.map(({ id }) => id));
+  return [...ids].filter((id) => known.has(id)).sort((a, b) => a - b);
 }
 
 function priced(path: Path | null, ids: readonly number[]): PricedRun | null {

@@ -39,7 +39,7 @@ export function drivingMinutes(miles: number): number {
     minutes += ((Math.min(miles, upToMiles) - from) / mph) * 60;
     from = upToMiles;
   }
-  return Math.ceil(minutes - 1e-9);
+  return Math.max(0, Math.ceil(minutes - 1e-9));
 }
 
 /** The default estimate of a leg: straight line times `circuity`, speed by distance. */
