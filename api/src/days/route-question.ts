@@ -3,6 +3,7 @@ import { addDays } from '@shared/calendar/add-days';
 import { blackoutCalendar } from '@shared/calendar/blackout-calendar';
 import { placeKey, type ForecastPlace } from '@shared/forecast/outdoor-forecast';
 import type { Policy } from '@shared/policy/policy';
+import { doorRefusal } from '@shared/parcels/door-refusal';
 import { assertCommonBand } from '@shared/verdict/contents-limits';
 import { calendarReachDays, type Destination, type RouteQuestion } from '@shared/verdict/day-question';
 import { badInput, type FieldProblem } from '@shared/errors';
@@ -133,6 +134,11 @@ function parts(world: DayWorld, draft: RouteDraft) {
   });
   const destination = destinationOf(world, draft);
   if (!destination) errors.push({ path: 'destination.counterId', message: 'That counter holds no parcels.' });
+  const atDoor = doorRefusal(
+    draft.service,
+    contents.flatMap(({ species }) => world.species.get(species.id) ?? []),
+  );
+  if (atDoor) errors.push({ path: 'service', message: atDoor });
   const hub = origin ? world.hubByCarrier.get(origin.carrierId) : undefined;
   if (errors.length > 0 || !origin || !box || !destination || !hub) throw badInput(errors);
   assertCommonBand(contents);

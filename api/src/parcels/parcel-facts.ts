@@ -2,6 +2,7 @@ import type * as z from 'zod';
 import type { Box, Counter, Parcel, parcelNew, PostalCodeInfo, Species } from '@shared/contract';
 import { badInput, type FieldProblem } from '@shared/errors';
 import { commonBand } from '@shared/parcels/common-band';
+import { doorRefusal } from '@shared/parcels/door-refusal';
 import type { Deps } from '../deps';
 
 /** What a person says of a parcel: the fields of `POST` with the drop-off counter known. */
@@ -127,12 +128,8 @@ function checkContents(
       path: 'contents',
       message: `${capital(band.warmest)} and ${band.coolest} do not go into one box: no temperature suits both.`,
     });
-  const venomous = known.find((one) => one.venomous);
-  if (venomous && facts.service === 'door')
-    errors.push({
-      path: 'service',
-      message: `The ${venomous.commonName} is venomous: it is only handed out at a counter, never left at a door.`,
-    });
+  const atDoor = doorRefusal(facts.service, known);
+  if (atDoor) errors.push({ path: 'service', message: atDoor });
   return errors;
 }
 

@@ -21,12 +21,16 @@ export function blackoutDates(blackout: BlackoutSpan, from: string, to: string):
 }
 
 function covered(blackout: BlackoutSpan, first: string, last: string): string[] {
-  if (blackout.kind !== 'yearly') return blackout.startDate === null ? [] : datesFrom(first, daysBetween(first, last) + 1);
+  if (blackout.kind !== 'yearly')
+    return blackout.startDate === null ? [] : datesFrom(first, daysBetween(first, last) + 1);
   return ruleLines(blackout.rules).flatMap((rule) => yearlyRuleDates(rule, first, last, blackout.startDate));
 }
 
 /** The single RRULE values of a blackout's rules text. */
 export const ruleLines = (rules: string | null): string[] =>
-  (rules ?? '').split('\n').map((text) => text.trim()).filter((text) => text !== '');
+  (rules ?? '')
+    .split('\n')
+    .map((text) => text.trim())
+    .filter((text) => text !== '');
 
 const later = (a: string, b: string | null): string => (b !== null && b > a ? b : a);

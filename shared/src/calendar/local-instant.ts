@@ -13,7 +13,10 @@ export function localInstant(date: string, minute: number, zone: string): number
   if (minute >= 1440) return end;
   if (end - start === 86_400_000) return start + minute * 60_000;
   const [year, month, day] = date.split('-').map(Number);
-  const at = DateTime.fromObject({ year, month, day, hour: Math.floor(minute / 60), minute: minute % 60 }, { zone });
+  const at = DateTime.fromObject(
+    { year, month, day, hour: Math.floor(minute / 60), minute: minute % 60 },
+    { zone },
+  );
   const earlier = at.minus({ hours: 1 });
   const twice = earlier.hour === at.hour && earlier.minute === at.minute && earlier.day === at.day;
   return (twice ? earlier : at).toMillis();

@@ -11,6 +11,7 @@ export const slackCountedDays = 2;
  */
 export function slackDays(place: WorkPlace, arrivalDate: string, calendar: BlackoutCalendar): number {
   let count = 0;
-  while (count < slackCountedDays && isWorkingDay(place, addDays(arrivalDate, count + 1), calendar)) count += 1;
+  while (count < slackCountedDays && isWorkingDay(place, addDays(arrivalDate, count + 1), calendar))
+    count += 1;
   return count;
 }

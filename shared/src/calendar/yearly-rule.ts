@@ -22,7 +22,11 @@ const parts: Readonly<Record<string, RegExp>> = {
  * like) are refused: a blackout is about days, and they would make one rule yield thousands of instants a day.
  */
 export function yearlyRuleProblem(rule: string, startDate: string | null = null): string | null {
-  const pairs = rule.trim().replace(/^RRULE:/, '').split(';').map((text) => text.split('='));
+  const pairs = rule
+    .trim()
+    .replace(/^RRULE:/, '')
+    .split(';')
+    .map((text) => text.split('='));
   const names = pairs.map(([name]) => name ?? '');
   if (names[0] !== 'FREQ') return 'A rule begins with FREQ=YEARLY.';
   const twice = names.find((name, index) => names.indexOf(name) !== index);
@@ -43,7 +47,12 @@ export function yearlyRuleProblem(rule: string, startDate: string | null = null)
  * `startDate` is its DTSTART: nothing lies before it, and INTERVAL and COUNT count from it; without one they count from 2000.
  * Throws RangeError when `yearlyRuleProblem` has something to say.
  */
-export function yearlyRuleDates(rule: string, from: string, to: string, startDate: string | null = null): string[] {
+export function yearlyRuleDates(
+  rule: string,
+  from: string,
+  to: string,
+  startDate: string | null = null,
+): string[] {
   const problem = yearlyRuleProblem(rule, startDate);
   if (problem) throw new RangeError(problem);
   const text = rule.trim().replace(/^RRULE:/, '');

@@ -1,11 +1,19 @@
 import type { ContentLine } from '../contract/days';
 import type { Species } from '../contract/places';
 import { badInput } from '../errors';
+import { commonBand } from '../parcels/common-band';
 
 /** The temperature limits of a species, °F, as far as verdicts need them. */
 export type SpeciesLimits = Pick<
   Species,
-  'id' | 'commonName' | 'bandLowF' | 'bandHighF' | 'enduranceLowF' | 'enduranceHighF' | 'outdoorLowF' | 'outdoorHighF'
+  | 'id'
+  | 'commonName'
+  | 'bandLowF'
+  | 'bandHighF'
+  | 'enduranceLowF'
+  | 'enduranceHighF'
+  | 'outdoorLowF'
+  | 'outdoorHighF'
 >;
 
 /** One line of a box's contents with the limits of its species. */
@@ -23,13 +31,7 @@ export interface ContentsLimits {
   readonly outdoorHighF: number | null;
 }
 
-/** Two species whose bands do not meet: the one that must stay warmer and the one that must stay cooler. */
-export interface BandConflict {
-  readonly warmer: SpeciesLimits;
-  readonly cooler: SpeciesLimits;
-}
-
-/** The intersection of all limits in the box; the band may be empty (see `bandConflict`). Contents must not be empty. */
+/** The intersection of all limits in the box; the band may be empty (see `assertCommonBand`). Contents must not be empty. */
 export function contentsLimits(contents: readonly ContentsLine[]): ContentsLimits {
   const all = contents.map((line) => line.species);
   const lows = all.flatMap((one) => (one.outdoorLowF === null ? [] : [one.outdoorLowF]));
@@ -44,25 +46,12 @@ export function contentsLimits(contents: readonly ContentsLine[]): ContentsLimit
   };
 }
 
-/** The two species that make the common band empty, or null when there is one. A band of a single degree counts as one. */
-export function bandConflict(contents: readonly ContentsLine[]): BandConflict | null {
-  const all = contents.map((line) => line.species);
-  const [first] = all;
-  if (!first) return null;
-  const warmer = all.reduce((most, one) => (one.bandLowF > most.bandLowF ? one : most), first);
-  const cooler = all.reduce((least, one) => (one.bandHighF < least.bandHighF ? one : least), first);
-  return warmer.bandLowF > cooler.bandHighF ? { warmer, cooler } : null;
-}
-
 /** The limits of a box's contents. Throws bad-input at `contents`, naming the two species whose bands do not meet. */
 export function assertCommonBand(contents: readonly ContentsLine[]): ContentsLimits {
-  const conflict = bandConflict(contents);
-  if (conflict) {
-    const { warmer, cooler } = conflict;
-    const message =
-      `A ${warmer.commonName} needs at least ${warmer.bandLowF} °F and a ${cooler.commonName} at most ` +
-      `${cooler.bandHighF} °F: they cannot share a box.`;
-    throw badInput([{ path: 'contents', message }], message);
+  const band = commonBand(contents.map(({ species }) => species));
+  if (band && !band.ok) {
+    const message = `${band.warmest} and ${band.coolest} do not go into one box: no temperature suits both.`;
+    throw badInput([{ path: 'contents', message: message.charAt(0).toUpperCase() + message.slice(1) }]);
   }
   return contentsLimits(contents);
 }

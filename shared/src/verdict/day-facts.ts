@@ -82,7 +82,12 @@ export function dayFacts(question: DayQuestion): DayFacts {
     leadDays: daysBetween(today, shipDate),
     arrivalDate,
     arrivalAtMs,
-    originWork: { workingDays: origin.workingDays, carrierId: origin.carrierId, state: origin.state, counterId: origin.id },
+    originWork: {
+      workingDays: origin.workingDays,
+      carrierId: origin.carrierId,
+      state: origin.state,
+      counterId: origin.id,
+    },
     destinationWork: to.work,
     destinationName: to.name,
     destinationCity: to.city,
@@ -99,11 +104,27 @@ export function dayFacts(question: DayQuestion): DayFacts {
 function destinationFacts({ destination, origin }: DayQuestion) {
   if (destination.kind === 'hold') {
     const { counter } = destination;
-    const work = { workingDays: counter.workingDays, carrierId: counter.carrierId, state: counter.state, counterId: counter.id };
-    return { work, name: counter.name, city: counter.city, zone: counter.zone, readyMinute: counter.commitMinute };
+    const work = {
+      workingDays: counter.workingDays,
+      carrierId: counter.carrierId,
+      state: counter.state,
+      counterId: counter.id,
+    };
+    return {
+      work,
+      name: counter.name,
+      city: counter.city,
+      zone: counter.zone,
+      readyMinute: counter.commitMinute,
+    };
   }
   const { door } = destination;
-  const work = { workingDays: mondayToFriday, carrierId: origin.carrierId, state: door.state, counterId: null };
+  const work = {
+    workingDays: mondayToFriday,
+    carrierId: origin.carrierId,
+    state: door.state,
+    counterId: null,
+  };
   return { work, name: door.name, city: door.city, zone: door.zone, readyMinute: doorMinute };
 }
 
@@ -114,7 +135,10 @@ function routePlaces(
   const bucket = (forecast: typeof weather.origin) => (forecast ? placeWeather(forecast) : null);
   const { arrivalDate, packedMs, city, zone } = known;
   // At either end both the ship day and the arrival day count, each as a whole local day (design 5.5).
-  const days = (of: string) => ({ fromMs: startOfLocalDay(shipDate, of), toMs: startOfLocalDay(addDays(arrivalDate, 1), of) });
+  const days = (of: string) => ({
+    fromMs: startOfLocalDay(shipDate, of),
+    toMs: startOfLocalDay(addDays(arrivalDate, 1), of),
+  });
   const night = {
     fromMs: localInstant(shipDate, hubNight.fromMinute, hub.zone),
     toMs: localInstant(arrivalDate, hubNight.toMinute, hub.zone),
@@ -122,9 +146,32 @@ function routePlaces(
   const leavesMs = localInstant(shipDate, leavesCounterMinute, origin.zone);
   const arrivalDay = { alertFromMs: startOfLocalDay(arrivalDate, zone), alertToMs: days(zone).toMs };
   return [
-    { role: 'origin', name: origin.city, zone: origin.zone, weather: bucket(weather.origin), ...days(origin.zone), alertFromMs: packedMs, alertToMs: leavesMs },
-    { role: 'hub', name: hub.city, zone: hub.zone, weather: bucket(weather.hub), ...night, alertFromMs: night.fromMs, alertToMs: night.toMs },
-    { role: 'destination', name: city, zone, weather: bucket(weather.destination), ...days(zone), ...arrivalDay },
+    {
+      role: 'origin',
+      name: origin.city,
+      zone: origin.zone,
+      weather: bucket(weather.origin),
+      ...days(origin.zone),
+      alertFromMs: packedMs,
+      alertToMs: leavesMs,
+    },
+    {
+      role: 'hub',
+      name: hub.city,
+      zone: hub.zone,
+      weather: bucket(weather.hub),
+      ...night,
+      alertFromMs: night.fromMs,
+      alertToMs: night.toMs,
+    },
+    {
+      role: 'destination',
+      name: city,
+      zone,
+      weather: bucket(weather.destination),
+      ...days(zone),
+      ...arrivalDay,
+    },
   ];
 }
 
@@ -138,5 +185,8 @@ function outdoorRange(places: readonly RoutePlace[], shipDate: string, arrivalDa
     return found.filter((range) => range !== null);
   });
   if (ranges.length === 0) return null;
-  return { lowF: Math.min(...ranges.map((range) => range.lowF)), highF: Math.max(...ranges.map((range) => range.highF)) };
+  return {
+    lowF: Math.min(...ranges.map((range) => range.lowF)),
+    highF: Math.max(...ranges.map((range) => range.highF)),
+  };
 }

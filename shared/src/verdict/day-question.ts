@@ -12,7 +12,8 @@ export interface DoorPlace {
   readonly state: string;
   readonly zone: string;
 }
-export type Destination = { readonly kind: 'hold'; readonly counter: Counter } | { readonly kind: 'door'; readonly door: DoorPlace };
+export type Destination =
+  { readonly kind: 'hold'; readonly counter: Counter } | { readonly kind: 'door'; readonly door: DoorPlace };
 
 /** Everything about a route and its parcel that the verdict of any of its days rests on. All of it is read, none changed. */
 export interface RouteQuestion {

@@ -12,7 +12,14 @@ import { worded, type Check } from './draft-reason';
 import { verdictSeverity, worstVerdict } from './worst-verdict';
 
 /** Every look at a day. A further one only ever makes a day worse: the verdict is the worst of them all. */
-const checks: readonly Check<DayFacts>[] = [calendarCheck, readinessCheck, forecastCheck, alertCheck, railCheck, packCheck];
+const checks: readonly Check<DayFacts>[] = [
+  calendarCheck,
+  readinessCheck,
+  forecastCheck,
+  alertCheck,
+  railCheck,
+  packCheck,
+];
 
 /**
  * The verdict of one ship day with its reasons, worst first (design 5.5). Pure: the same question, the same answer.
@@ -22,7 +29,9 @@ export function dayVerdict(question: DayQuestion): DayVerdict {
   const facts = dayFacts(question);
   const drafts = checks.flatMap((check) => check(facts));
   const verdict = worstVerdict(drafts.map((reason) => reason.verdict));
-  const reasons = drafts.toSorted((a, b) => verdictSeverity(b.verdict) - verdictSeverity(a.verdict)).map(worded);
+  const reasons = drafts
+    .toSorted((a, b) => verdictSeverity(b.verdict) - verdictSeverity(a.verdict))
+    .map(worded);
   const issued = facts.places.flatMap((place) => (place.weather ? [place.weather.issuedMs] : []));
   return {
     date: facts.shipDate,
@@ -31,7 +40,11 @@ export function dayVerdict(question: DayQuestion): DayVerdict {
     lateChance: null,
     slackDays: facts.slackDays,
     pack: packOf(facts),
-    arrival: { at: new Date(facts.arrivalAtMs).toISOString(), place: facts.destinationName, zone: facts.destinationZone },
+    arrival: {
+      at: new Date(facts.arrivalAtMs).toISOString(),
+      place: facts.destinationName,
+      zone: facts.destinationZone,
+    },
     outdoor: facts.outdoor,
     inBox: null,
     reasons,

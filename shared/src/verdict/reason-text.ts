@@ -12,39 +12,57 @@ const date = (values: Values, key: string): string =>
   DateTime.fromISO(text(values, key), { zone: 'utc' }).toFormat('cccc, LLLL d', { locale: 'en-US' });
 /** "5 am Wednesday", on the clock of the place. */
 const hour = (values: Values): string =>
-  DateTime.fromISO(text(values, 'at'), { zone: text(values, 'zone') }).toFormat('h a cccc', { locale: 'en-US' }).replace(/ (AM|PM) /, (_, half: string) => ` ${half.toLowerCase()} `);
+  DateTime.fromISO(text(values, 'at'), { zone: text(values, 'zone') })
+    .toFormat('h a cccc', { locale: 'en-US' })
+    .replace(/ (AM|PM) /, (_, half: string) => ` ${half.toLowerCase()} `);
 const count = (n: number, one: string): string => `${n} ${one}${n === 1 ? '' : 's'}`;
 
 const sentences: Readonly<Record<string, (v: Values) => string>> = {
   past: () => 'That day is over.',
   'beyond-offer': (v) => `Only the next ${number(v, 'days')} days are offered.`,
-  'origin-closed': (v) => `The ${text(v, 'place')} takes no drop-off on ${date(v, 'date')}${v['title'] ? `: ${text(v, 'title')}` : ''}.`,
+  'origin-closed': (v) =>
+    `The ${text(v, 'place')} takes no drop-off on ${date(v, 'date')}${v['title'] ? `: ${text(v, 'title')}` : ''}.`,
   'cut-off-passed': (v) => `The cut-off at the ${text(v, 'place')} has passed.`,
-  'arrival-closed': (v) => `It would arrive on ${date(v, 'date')}, when the ${text(v, 'place')} hands nothing out${v['title'] ? ` (${text(v, 'title')})` : ''}, and rest over a day off.`,
-  'no-slack': (v) => `No working day follows the arrival at the ${text(v, 'place')}: a late parcel would wait over the days off${v['next'] ? ` until ${date(v, 'next')}` : ''}.`,
-  slack: (v) => `${number(v, 'days') === 1 ? 'One working day follows' : 'Two working days follow'} the arrival as slack.`,
+  'arrival-closed': (v) =>
+    `It would arrive on ${date(v, 'date')}, when the ${text(v, 'place')} hands nothing out${v['title'] ? ` (${text(v, 'title')})` : ''}, and rest over a day off.`,
+  'no-slack': (v) =>
+    `No working day follows the arrival at the ${text(v, 'place')}: a late parcel would wait over the days off${v['next'] ? ` until ${date(v, 'next')}` : ''}.`,
+  slack: (v) =>
+    `${number(v, 'days') === 1 ? 'One working day follows' : 'Two working days follow'} the arrival as slack.`,
   'not-ready': (v) => `The parcel is ready from ${date(v, 'date')}.`,
   'too-late': (v) => `The latest day you gave is ${date(v, 'date')}.`,
-  'fed-lately': (v) => `The last meal was ${count(number(v, 'days'), 'day')} before; the circle keeps ${count(number(v, 'need'), 'day')} without food.`,
+  'fed-lately': (v) =>
+    `The last meal was ${count(number(v, 'days'), 'day')} before; the circle keeps ${count(number(v, 'need'), 'day')} without food.`,
   'breeder-away': (v) => `You are away on ${date(v, 'date')}.`,
   'buyer-away': (v) => `The buyer cannot collect on ${date(v, 'date')}.`,
-  'buyer-not-said': (v) => `The buyer has named mornings that suit, and ${date(v, 'date')} is not among them.`,
-  'too-cold': (v) => `${text(v, 'place')} falls to ${degrees(v, 'lowF')} at ${hour(v)}, ${inTenths(number(v, 'byF'))} °F under the limit of ${degrees(v, 'limitF')}${limitOf(v)}.`,
-  'too-hot': (v) => `${text(v, 'place')} rises to ${degrees(v, 'highF')} at ${hour(v)}, ${inTenths(number(v, 'byF'))} °F over the limit of ${degrees(v, 'limitF')}${limitOf(v)}.`,
-  'near-cold': (v) => `${text(v, 'place')} falls to ${degrees(v, 'lowF')} at ${hour(v)}, only ${inTenths(number(v, 'byF'))} °F above the limit of ${degrees(v, 'limitF')}${limitOf(v)}; a forecast ${ahead(v)} is often ${inTenths(number(v, 'sigmaF'))} °F off.`,
-  'near-hot': (v) => `${text(v, 'place')} rises to ${degrees(v, 'highF')} at ${hour(v)}, only ${inTenths(number(v, 'byF'))} °F below the limit of ${degrees(v, 'limitF')}${limitOf(v)}; a forecast ${ahead(v)} is often ${inTenths(number(v, 'sigmaF'))} °F off.`,
-  'outdoors-fine': (v) => `Outdoors it stays between ${degrees(v, 'lowF')} and ${degrees(v, 'highF')} along the route, at least ${inTenths(number(v, 'marginF'))} °F inside the limits.`,
+  'buyer-not-said': (v) =>
+    `The buyer has named mornings that suit, and ${date(v, 'date')} is not among them.`,
+  'too-cold': (v) =>
+    `${text(v, 'place')} falls to ${degrees(v, 'lowF')} at ${hour(v)}, ${inTenths(number(v, 'byF'))} °F under the limit of ${degrees(v, 'limitF')}${limitOf(v)}.`,
+  'too-hot': (v) =>
+    `${text(v, 'place')} rises to ${degrees(v, 'highF')} at ${hour(v)}, ${inTenths(number(v, 'byF'))} °F over the limit of ${degrees(v, 'limitF')}${limitOf(v)}.`,
+  'near-cold': (v) =>
+    `${text(v, 'place')} falls to ${degrees(v, 'lowF')} at ${hour(v)}, only ${inTenths(number(v, 'byF'))} °F above the limit of ${degrees(v, 'limitF')}${limitOf(v)}; a forecast ${ahead(v)} is often ${inTenths(number(v, 'sigmaF'))} °F off.`,
+  'near-hot': (v) =>
+    `${text(v, 'place')} rises to ${degrees(v, 'highF')} at ${hour(v)}, only ${inTenths(number(v, 'byF'))} °F below the limit of ${degrees(v, 'limitF')}${limitOf(v)}; a forecast ${ahead(v)} is often ${inTenths(number(v, 'sigmaF'))} °F off.`,
+  'outdoors-fine': (v) =>
+    `Outdoors it stays between ${degrees(v, 'lowF')} and ${degrees(v, 'highF')} along the route, at least ${inTenths(number(v, 'marginF'))} °F inside the limits.`,
   alert: (v) => `${text(v, 'event')} for ${text(v, 'place')} until ${hour({ ...v, at: v['to'] ?? '' })}.`,
   'alerts-unknown': (v) => `Weather alerts for ${text(v, 'place')} could not be read.`,
-  'no-forecast': (v) => `There is no forecast for ${text(v, 'place')} on ${date(v, 'date')}, so nobody can say that the day is safe.`,
-  'forecast-old': (v) => `The forecast for ${text(v, 'place')} is ${Math.round(number(v, 'hours'))} h old; only one of at most ${number(v, 'mostHours')} h can make a day open.`,
-  'forecast-far': (v) => `The forecast for ${text(v, 'place')} does not reach ${date(v, 'date')} yet. The calendar is checked, the weather is not.`,
+  'no-forecast': (v) =>
+    `There is no forecast for ${text(v, 'place')} on ${date(v, 'date')}, so nobody can say that the day is safe.`,
+  'forecast-old': (v) =>
+    `The forecast for ${text(v, 'place')} is ${Math.round(number(v, 'hours'))} h old; only one of at most ${number(v, 'mostHours')} h can make a day open.`,
+  'forecast-far': (v) =>
+    `The forecast for ${text(v, 'place')} does not reach ${date(v, 'date')} yet. The calendar is checked, the weather is not.`,
   pack: (v) => packText(text(v, 'pack'), v),
-  'pack-short': (v) => `A ${number(v, 'hours')}-hour heat pack is less than the ${Math.round(number(v, 'needHours'))} h planned with a day to spare${v['longer'] ? `; use the ${text(v, 'longer')}-hour one` : ''}.`,
+  'pack-short': (v) =>
+    `A ${number(v, 'hours')}-hour heat pack is less than the ${Math.round(number(v, 'needHours'))} h planned with a day to spare${v['longer'] ? `; use the ${text(v, 'longer')}-hour one` : ''}.`,
 };
 
 const limitOf = (v: Values): string => (v['species'] ? ` for a ${text(v, 'species')}` : '');
-const ahead = (v: Values): string => (number(v, 'leadDays') === 0 ? 'for today' : `${count(number(v, 'leadDays'), 'day')} ahead`);
+const ahead = (v: Values): string =>
+  number(v, 'leadDays') === 0 ? 'for today' : `${count(number(v, 'leadDays'), 'day')} ahead`;
 
 function packText(pack: string, v: Values): string {
   if (pack === 'cold') return `Use a cold pack: it rises to ${degrees(v, 'highF')} along the route.`;

@@ -11,6 +11,10 @@ export function alertCheck(facts: DayFacts): DraftReason[] {
     return alerts
       .filter((alert) => shutting.has(alert.event.toLowerCase()))
       .filter((alert) => Date.parse(alert.from) < place.alertToMs && Date.parse(alert.to) > place.alertFromMs)
-      .map((alert) => ({ code: 'alert', verdict: 'shut', values: { event: alert.event, place: place.name, from: alert.from, to: alert.to, zone: place.zone } }));
+      .map((alert) => ({
+        code: 'alert',
+        verdict: 'shut',
+        values: { event: alert.event, place: place.name, from: alert.from, to: alert.to, zone: place.zone },
+      }));
   });
 }

@@ -17,5 +17,9 @@ export function coverageOf(facts: DayFacts, place: RoutePlace): Coverage {
   if (weather === null) return place.toMs > usualReach ? 'far' : 'missing';
   if (fromMs >= place.toMs) return 'known';
   if (place.toMs > Math.max(reach + bridgedHours * hourMs, usualReach)) return 'far';
-  return weather.longestGapHours(fromMs, place.toMs) > bridgedHours ? (place.toMs > usualReach && reach < place.toMs ? 'far' : 'missing') : 'known';
+  return weather.longestGapHours(fromMs, place.toMs) > bridgedHours
+    ? place.toMs > usualReach && reach < place.toMs
+      ? 'far'
+      : 'missing'
+    : 'known';
 }

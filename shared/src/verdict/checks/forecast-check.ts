@@ -9,10 +9,14 @@ export function forecastCheck(facts: DayFacts): DraftReason[] {
   return facts.places.flatMap((place): DraftReason[] => {
     const date = facts[names[place.role]];
     const coverage = coverageOf(facts, place);
-    if (coverage === 'missing') return [{ code: 'no-forecast', verdict: 'shut', values: { place: place.name, date } }];
-    if (coverage === 'far' || place.weather === null) return [{ code: 'forecast-far', verdict: 'far', values: { place: place.name, date } }];
+    if (coverage === 'missing')
+      return [{ code: 'no-forecast', verdict: 'shut', values: { place: place.name, date } }];
+    if (coverage === 'far' || place.weather === null)
+      return [{ code: 'forecast-far', verdict: 'far', values: { place: place.name, date } }];
     const hours = (facts.nowMs - place.weather.issuedMs) / 3_600_000;
     const mostHours = facts.policy.forecastMaxAgeHours;
-    return hours > mostHours ? [{ code: 'forecast-old', verdict: 'tight', values: { place: place.name, hours, mostHours } }] : [];
+    return hours > mostHours
+      ? [{ code: 'forecast-old', verdict: 'tight', values: { place: place.name, hours, mostHours } }]
+      : [];
   });
 }

@@ -31,6 +31,7 @@ export function packCheck(facts: DayFacts): DraftReason[] {
   const values = { pack, belowF: facts.policy.heatPackBelowF, highF: range.most };
   const found: DraftReason[] = [{ code: 'pack', verdict: 'open', values }];
   const needHours = facts.hoursInBox + facts.policy.heatPackSpareHours;
-  if (pack === 'heat-72' && needHours > 72) found.push({ code: 'pack-short', verdict: 'tight', values: { hours: 72, needHours, longer: null } });
+  if (pack === 'heat-72' && needHours > 72)
+    found.push({ code: 'pack-short', verdict: 'tight', values: { hours: 72, needHours, longer: null } });
   return found;
 }

@@ -40,21 +40,36 @@ export function railCheck(facts: DayFacts): DraftReason[] {
 
 function railOf(facts: DayFacts, place: RoutePlace): Rail {
   const { policy, service, limits, contents } = facts;
-  if (place.role === 'hub') return { low: { valueF: policy.hubRail.lowF, species: null }, high: { valueF: policy.hubRail.highF, species: null } };
+  if (place.role === 'hub')
+    return {
+      low: { valueF: policy.hubRail.lowF, species: null },
+      high: { valueF: policy.hubRail.highF, species: null },
+    };
   const rail = policy.guardRails[service];
   const lowF = Math.max(rail.lowF, limits.outdoorLowF ?? -Infinity);
   const highF = Math.min(rail.highF, limits.outdoorHighF ?? Infinity);
-  const by = (f: number, end: 'outdoorLowF' | 'outdoorHighF') => contents.find((line) => line.species[end] === f)?.species.commonName ?? null;
+  const by = (f: number, end: 'outdoorLowF' | 'outdoorHighF') =>
+    contents.find((line) => line.species[end] === f)?.species.commonName ?? null;
   return {
     low: { valueF: lowF, species: lowF > rail.lowF ? by(lowF, 'outdoorLowF') : null },
     high: { valueF: highF, species: highF < rail.highF ? by(highF, 'outdoorHighF') : null },
   };
 }
 
-function look(facts: DayFacts, place: RoutePlace, range: Extremes, rail: Rail): { reasons: DraftReason[]; insideF: number } {
+function look(
+  facts: DayFacts,
+  place: RoutePlace,
+  range: Extremes,
+  rail: Rail,
+): { reasons: DraftReason[]; insideF: number } {
   const sigma = sigmaF(facts);
   const at = (ms: number) => new Date(ms).toISOString();
-  const common = { place: place.name, zone: place.zone, sigmaF: sigma, leadDays: Math.max(0, facts.leadDays) };
+  const common = {
+    place: place.name,
+    zone: place.zone,
+    sigmaF: sigma,
+    leadDays: Math.max(0, facts.leadDays),
+  };
   const aboveF = range.lowF - rail.low.valueF;
   const belowF = rail.high.valueF - range.highF;
   const reasons: DraftReason[] = [];
@@ -62,13 +77,27 @@ function look(facts: DayFacts, place: RoutePlace, range: Extremes, rail: Rail): 
     reasons.push({
       code: aboveF < 0 ? 'too-cold' : 'near-cold',
       verdict: aboveF < 0 ? 'shut' : 'tight',
-      values: { ...common, at: at(range.lowAtMs), lowF: range.lowF, limitF: rail.low.valueF, byF: Math.abs(aboveF), species: rail.low.species },
+      values: {
+        ...common,
+        at: at(range.lowAtMs),
+        lowF: range.lowF,
+        limitF: rail.low.valueF,
+        byF: Math.abs(aboveF),
+        species: rail.low.species,
+      },
     });
   if (belowF < sigma)
     reasons.push({
       code: belowF < 0 ? 'too-hot' : 'near-hot',
       verdict: belowF < 0 ? 'shut' : 'tight',
-      values: { ...common, at: at(range.highAtMs), highF: range.highF, limitF: rail.high.valueF, byF: Math.abs(belowF), species: rail.high.species },
+      values: {
+        ...common,
+        at: at(range.highAtMs),
+        highF: range.highF,
+        limitF: rail.high.valueF,
+        byF: Math.abs(belowF),
+        species: rail.high.species,
+      },
     });
   return { reasons, insideF: Math.min(aboveF, belowF) };
 }
