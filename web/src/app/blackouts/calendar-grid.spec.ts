@@ -47,6 +47,12 @@ describe('the month calendar', () => {
     ]);
   });
 
+  it('leaves a title the room of its bar in the week', () => {
+    // 24 to 26 December 2026 are Thursday to Saturday, the last days of an American week.
+    expect(day('2026-12-24')?.bars[0]?.span).toBe(3);
+    expect(day('2026-12-27')?.bars[0]?.span).toBe(1);
+  });
+
   it('names a bar at its beginning and again in each week', () => {
     expect(day('2026-12-24')?.bars[0]).toMatchObject({ starts: true, ends: false, isNamed: true });
     expect(day('2026-12-25')?.bars[0]).toMatchObject({ starts: false, ends: false, isNamed: false });

@@ -10,6 +10,8 @@ export interface CalendarBar {
   readonly ends: boolean;
   /** Whether the title is written in this cell: the first of the blackout in this week of this month. */
   readonly isNamed: boolean;
+  /** From this cell on, how many cells of this week the bar still takes: room for its title. */
+  readonly span: number;
 }
 
 export interface CalendarDay {
@@ -81,6 +83,7 @@ function barsOf(
   const isOn = (day: string, id: number): boolean =>
     (covered.get(day) ?? []).some((blackout) => blackout.id === id);
   const isSunday = startOfWeek(date) === date;
+  const weekEnd = [addDays(startOfWeek(date), 6), endOfMonth(month)].sort()[0] ?? date;
   return (covered.get(date) ?? [])
     .map((blackout) => {
       const starts = !isOn(addDays(date, -1), blackout.id);
@@ -90,6 +93,7 @@ function barsOf(
         starts,
         ends: !isOn(addDays(date, 1), blackout.id),
         isNamed: starts || isSunday || date === `${month}-01`,
+        span: datesBetween(date, weekEnd).filter((day) => isOn(day, blackout.id)).length,
       };
     })
     .sort((a, b) => a.lane - b.lane);
