@@ -82,7 +82,9 @@ function emptyCalendar(method: keyof typeof ICalCalendarMethod): ICalCalendar {
 
 function addEvent(calendar: ICalCalendar, entry: CalendarEntry, cancelled: boolean): void {
   const { event } = entry;
-  const zone = timeZoneBlock(event.zone) === null ? null : event.zone;
+  const hasZone =
+    timeZoneBlock(event.zone) !== null && ![event.start, event.end].some(comesTwice(event.zone));
+  const zone = hasZone ? event.zone : null;
   const at = (instant: string) => DateTime.fromISO(instant, { zone: zone ?? 'utc' });
   const created = calendar.createEvent({
     id: entry.uid,
@@ -106,6 +108,15 @@ function addEvent(calendar: ICalCalendar, entry: CalendarEntry, cancelled: boole
       description: oneLine(event.summary),
     });
 }
+
+/**
+ * Whether the local time of an instant comes twice, in the hour when the clock goes back. RFC 5545 3.3.5 reads it as the
+ * first, programs differ, so such an event is written in UTC.
+ */
+const comesTwice =
+  (zone: string) =>
+  (instant: string): boolean =>
+    DateTime.fromISO(instant, { zone }).getPossibleOffsets().length > 1;
 
 function attendee(person: Mailbox) {
   return {
