@@ -1,6 +1,6 @@
 import { Settings } from 'luxon';
 import type { DayVerdict, Verdict } from '@shared/contract';
-import { countText, firstDay, summaryText } from './summary-text';
+import { countText, summaryText } from './summary-text';
 
 const day = (date: string, verdict: Verdict): DayVerdict => ({
   date,
@@ -77,12 +77,5 @@ describe('the days in a sentence', () => {
     [[day('2026-12-11', 'shut')], '1 shut. None of them can be offered yet.'],
   ])('counts them', (days, expected) => {
     expect(countText(days)).toBe(expected);
-  });
-
-  it('shows the best day first', () => {
-    expect(firstDay(week)).toBe('2026-12-08');
-    expect(firstDay([day('2026-12-11', 'shut'), day('2026-12-14', 'far')])).toBe('2026-12-14');
-    expect(firstDay([day('2026-12-11', 'shut')])).toBe('2026-12-11');
-    expect(firstDay([])).toBeNull();
   });
 });

@@ -44,12 +44,6 @@ export function countText(days: readonly DayVerdict[]): string {
   return `${joined.format(counts)}.${best}`;
 }
 
-/** The day to show first: the first open one, else the first tight, else the first that is not shut. */
-export function firstDay(days: readonly DayVerdict[]): string | null {
-  const [best] = [...of(days, 'open'), ...of(days, 'tight'), ...of(days, 'far'), ...days];
-  return best?.date ?? null;
-}
-
 const of = (days: readonly DayVerdict[], verdict: Verdict) => days.filter((day) => day.verdict === verdict);
 
 function line(days: readonly DayVerdict[], verdict: Verdict, words: string): string {

@@ -3,10 +3,12 @@ import {
   Component,
   computed,
   effect,
+  type ElementRef,
   inject,
   linkedSignal,
   signal,
   untracked,
+  viewChild,
 } from '@angular/core';
 import { rxResource, takeUntilDestroyed, toObservable, toSignal } from '@angular/core/rxjs-interop';
 import { ReactiveFormsModule } from '@angular/forms';
@@ -29,6 +31,7 @@ import { CircleLists } from '../../ui/circle-lists';
 import { ContentsRows } from '../../ui/contents-rows/contents-rows';
 import { CopyButton } from '../../ui/copy-button/copy-button';
 import { DayReasons } from '../../ui/day-reasons/day-reasons';
+import { bestDay } from '../../ui/day-strip/best-day';
 import { DayStrip } from '../../ui/day-strip/day-strip';
 import { EmptyState } from '../../ui/empty-state/empty-state';
 import { HoldCounterField } from '../../ui/hold-counter-field/hold-counter-field';
@@ -36,9 +39,10 @@ import { NextAction } from '../../ui/next-action/next-action';
 import { PageHeader } from '../../ui/page-header/page-header';
 import { PlanningAid } from '../../ui/planning-aid/planning-aid';
 import { ProblemNote } from '../../ui/problem-note/problem-note';
+import { revealOnPhone } from '../../ui/reveal-on-phone';
 import { answersOf, checkForm, questionOf } from '../check-form';
 import { RouteCheckApi } from '../route-check-api';
-import { countText, firstDay, summaryText } from '../summary-text';
+import { countText, summaryText } from '../summary-text';
 
 /** Typing settles before the question goes out; short enough that the answer still comes within a second. */
 const settleMs = 250;
@@ -98,13 +102,14 @@ export class RouteCheckPage {
   });
   protected readonly chosen = linkedSignal(() => {
     const days = this.answer()?.days ?? [];
-    return firstDay(days);
+    return bestDay(days);
   });
   protected readonly day = computed(
     () => this.answer()?.days.find((one) => one.date === this.chosen()) ?? null,
   );
   protected readonly counts = computed(() => countText(this.answer()?.days ?? []));
   protected readonly message = signal<string | null>(null);
+  private readonly reasons = viewChild<ElementRef<HTMLElement>>('reasons');
   protected readonly summary = computed(() => {
     const answer = this.answer();
     const question = this.question();
@@ -138,6 +143,11 @@ export class RouteCheckPage {
       const error = this.check.error();
       untracked(() => this.message.set(error ? applyProblem(this.form, toProblem(error), renamed) : null));
     });
+  }
+
+  protected look(date: string): void {
+    this.chosen.set(date);
+    revealOnPhone(this.reasons()?.nativeElement);
   }
 
   private present() {

@@ -1,0 +1,83 @@
+import type { DayVerdict, Parcel } from '@shared/contract';
+
+/** A booked parcel for tests, invented; `change` overrides what a test is about. */
+export const sampleParcel = (change: Partial<Parcel> = {}): Parcel => ({
+  id: 14,
+  code: 'HC-0014',
+  state: 'booked',
+  breeder: { id: 4, name: 'Hanna Weiss', businessName: 'Third Draw Serpents' },
+  buyer: { id: 12, name: 'Kenji Morrow', email: 'kenji@example.org', phone: '555-0123' },
+  contents: [
+    {
+      speciesId: 1,
+      quantity: 1,
+      massG: 160,
+      commonName: 'corn snake',
+      scientificName: 'Pantherophis guttatus',
+    },
+  ],
+  totalMassG: 160,
+  box: { id: 1, name: 'Small box', volumeL: 10.6 },
+  service: 'hold',
+  dropOff: {
+    counterId: 1,
+    name: 'San Antonio airport counter',
+    city: 'San Antonio',
+    state: 'TX',
+    zone: 'America/Chicago',
+  },
+  destination: {
+    counterId: 28,
+    name: 'Flagstaff counter',
+    street: '4 Cinder Lane',
+    city: 'Flagstaff',
+    state: 'AZ',
+    postalCode: '86001',
+    zone: 'America/Phoenix',
+  },
+  readyFrom: '2026-12-02',
+  latestDate: '2026-12-19',
+  lastMealDate: null,
+  shipDate: '2026-12-08',
+  arrivalDate: '2026-12-09',
+  flexible: null,
+  acceptedTight: null,
+  holdReason: null,
+  run: null,
+  shareCents: null,
+  trackingNumber: null,
+  arrivalUrl: 'https://circle.example.org/arrival/abc',
+  mornings: [],
+  note: '',
+  report: null,
+  bookedVerdict: null,
+  createdAt: '2026-12-01T12:00:00.000Z',
+  updatedAt: '2026-12-01T12:00:00.000Z',
+  version: 3,
+  ...change,
+});
+
+/** An open day for tests. */
+export const sampleDay = (change: Partial<DayVerdict> = {}): DayVerdict => ({
+  date: '2026-12-08',
+  verdict: 'open',
+  chance: null,
+  lateChance: null,
+  slackDays: 1,
+  pack: 'none',
+  arrival: { at: '2026-12-09T16:00:00.000Z', place: 'Flagstaff counter', zone: 'America/Phoenix' },
+  outdoor: { lowF: 42, highF: 58 },
+  inBox: null,
+  reasons: [
+    {
+      code: 'slack',
+      verdict: 'open',
+      text: 'Two working days follow the arrival as slack.',
+      values: { days: 2 },
+    },
+  ],
+  leadDays: 7,
+  forecastAt: '2026-12-01T11:00:00.000Z',
+  run: null,
+  ...change,
+});
