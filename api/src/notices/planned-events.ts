@@ -1,6 +1,6 @@
 import type { Arrival, Run, RunStop } from '@shared/contract';
 import type { PlannedEvent } from './calendar-text';
-import { clockTime, count, dayAfter, instantAt, minutesLater } from './words';
+import { clockTime, count, dayAfter, instantAt, minutesLater, withoutOne } from './words';
 
 /** Boxes stand packed and sealed so many minutes before the driver comes. Assumption. */
 export const packedBeforeMinutes = 15;
@@ -85,7 +85,7 @@ export function arrivalEvent(arrival: Arrival, window: CollectionWindow, url: st
     start: window.from,
     end: atLeastAMinute(window.from, window.to),
     zone: place.zone,
-    summary: hold ? `Collect your ${arrival.what}` : `Your ${arrival.what} arrives`,
+    summary: hold ? `Collect your ${withoutOne(arrival.what)}` : `Your ${withoutOne(arrival.what)} arrives`,
     description: [
       first,
       `Parcel ${arrival.code} from ${arrival.breederName}.`,

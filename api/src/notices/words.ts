@@ -43,9 +43,8 @@ export function instantAt(date: string, minute: number, zone: string): string {
   );
 }
 
-/** What is in a box in a few words: "corn snake", "2 × crested gecko and corn snake". */
-export const contentsInWords = (contents: readonly { quantity: number; commonName: string }[]): string =>
-  contents.map((c) => (c.quantity === 1 ? c.commonName : `${c.quantity} × ${c.commonName}`)).join(' and ');
+/** "1 corn snake" → "corn snake"; what is more than one animal stays as it is. */
+export const withoutOne = (contents: string): string => contents.replace(/^1 ([^,]+)$/, '$1');
 
 /** One line without control characters (line breaks forge mail headers), runs of space joined. */
 export const oneLine = (text: string): string =>

@@ -1,4 +1,5 @@
 import type { Parcel } from '@shared/contract';
+import { contentsText } from '@shared/parcels/contents-text';
 import type { Deps } from '../deps';
 import { pageUrl } from './addresses';
 import type { InvitationMessage } from './invitations';
@@ -6,7 +7,7 @@ import type { NoticeEvent } from './notices-service';
 import { post } from './outbox';
 import type { CalendarPart } from './outbox-queries';
 import { letter, type LetterParts } from './templates/letter';
-import { contentsInWords } from './words';
+import { withoutOne } from './words';
 
 export type Of<K extends NoticeEvent['kind']> = Extract<NoticeEvent, { kind: K }>;
 
@@ -44,8 +45,8 @@ export async function writeMail(
   });
 }
 
-/** "corn snake", "2 × crested gecko and corn snake". */
-export const what = (parcel: Parcel): string => contentsInWords(parcel.contents);
+/** "corn snake", "2 crested geckos, 1 corn snake". */
+export const what = (parcel: Parcel): string => withoutOne(contentsText(parcel.contents));
 
 export const shopOf = (parcel: Parcel): string => parcel.breeder.businessName ?? parcel.breeder.name;
 
