@@ -49,6 +49,17 @@ describe('the next thing a parcel needs', () => {
     );
   });
 
+  it('passes on what the buyer reported', () => {
+    const report = { outcome: 'not-arrived' as const, text: '', at: '2026-12-09T18:00:00.000Z' };
+    expect(
+      needOf(sampleParcel({ state: 'handed-over', trackingNumber: 'LK1', report }), '2026-12-09').text,
+    ).toBe('Kenji Morrow reports that nothing has arrived.');
+    const well = { ...report, outcome: 'arrived-well' as const };
+    expect(needOf(sampleParcel({ state: 'arrived', report: well }), '2026-12-09').text).toBe(
+      'Kenji Morrow reports that the animals arrived well. Close it when all is settled.',
+    );
+  });
+
   it('waits inside the span that was left open', () => {
     const open = sampleParcel({
       state: 'seeking',

@@ -43,10 +43,10 @@ export function needOf(parcel: Parcel, today: string): Need {
     case 'handed-over':
       return {
         group: 'road',
-        text: `${arrivalText(parcel)}${parcel.trackingNumber ? '' : ' The tracking number is missing.'}`,
+        text: `${reportWords(parcel) ?? arrivalText(parcel)}${parcel.trackingNumber ? '' : ' The tracking number is missing.'}`,
       };
     case 'arrived':
-      return { group: 'finish', text: 'Arrived. Close it when all is settled.' };
+      return { group: 'finish', text: `${reportWords(parcel) ?? 'Arrived.'} Close it when all is settled.` };
     case 'closed':
       return {
         group: 'done',
@@ -119,6 +119,18 @@ function arrivalText({ arrivalDate, destination }: Parcel): string {
   const where =
     destination.counterId === null ? `the door in ${destination.city}` : `the ${destination.name}`;
   return arrivalDate ? `Planned at ${where} ${dayLabel(arrivalDate, 'medium')}.` : `On its way to ${where}.`;
+}
+
+/** What the buyer reported, in a sentence; null until they did. */
+export function reportWords({ report, buyer }: Pick<Parcel, 'report' | 'buyer'>): string | null {
+  if (!report) return null;
+  const outcomes = {
+    'arrived-well': 'that the animals arrived well',
+    'arrived-weak': 'that the animals arrived weak',
+    doa: 'a dead arrival (DOA)',
+    'not-arrived': 'that nothing has arrived',
+  };
+  return `${buyer.name} reports ${outcomes[report.outcome]}.`;
 }
 
 const spanText = (from: string, to: string): string =>

@@ -1,4 +1,4 @@
-import { HttpClient, HttpHeaders } from '@angular/common/http';
+import { HttpClient } from '@angular/common/http';
 import { inject, Injectable } from '@angular/core';
 import type { Observable } from 'rxjs';
 import type {
@@ -11,6 +11,7 @@ import type {
   ParcelPatch,
   Person,
 } from '@shared/contract';
+import { onVersion } from '../ui/save-state';
 
 /** The calls of the parcel pages. Every change of a parcel sends the version it was made on. */
 @Injectable({ providedIn: 'root' })
@@ -59,8 +60,4 @@ export class ParcelsApi {
   breeders(): Observable<BreederSummary[]> {
     return this.http.get<BreederSummary[]>('/api/breeders');
   }
-}
-
-function onVersion(parcel: Parcel): { headers: HttpHeaders } {
-  return { headers: new HttpHeaders({ 'If-Match': `"${parcel.version}"` }) };
 }

@@ -16,6 +16,7 @@ import { MatProgressBar } from '@angular/material/progress-bar';
 import { RouterLink } from '@angular/router';
 import { firstValueFrom, of, type Observable } from 'rxjs';
 import type { DaysAnswer, DayVerdict, Parcel, ParcelPatch, Problem } from '@shared/contract';
+import { dayAndClock } from '../../core/dates';
 import { DayLabelPipe } from '../../core/day-label-pipe';
 import { PageTitles } from '../../core/page-titles';
 import { SessionStore } from '../../core/session/session-store';
@@ -32,7 +33,7 @@ import { ProblemNote } from '../../ui/problem-note/problem-note';
 import { StateChip } from '../../ui/state-chip/state-chip';
 import { BuyerCard } from '../buyer-card/buyer-card';
 import { DayChoice, type DayBooking } from '../day-choice/day-choice';
-import { needOf } from '../next-need';
+import { needOf, reportWords } from '../next-need';
 import { ParcelFacts } from '../parcel-facts/parcel-facts';
 import { ParcelHistory } from '../parcel-history/parcel-history';
 import { parcelSteps } from '../parcel-steps';
@@ -94,6 +95,10 @@ export class ParcelPage {
       ? { id: parcel.id, version: parcel.version, isPlanned: stillPlanned.includes(parcel.state) }
       : undefined;
   });
+  protected readonly isPlanned = computed(() => this.edition()?.isPlanned ?? true);
+  protected readonly isGone = computed(() =>
+    ['handed-over', 'arrived', 'closed'].includes(this.parcel()?.state ?? ''),
+  );
   protected readonly days = rxResource({
     params: this.edition,
     stream: ({ params }) => (params.isPlanned ? this.api.days(params.id) : of(null)),
@@ -123,6 +128,14 @@ export class ParcelPage {
   protected readonly need = computed(() => {
     const parcel = this.parcel();
     return parcel ? needOf(parcel, dateIn(parcel.dropOff.zone, new Date())).text : null;
+  });
+  protected readonly report = computed(() => {
+    const parcel = this.parcel();
+    return parcel && reportWords(parcel);
+  });
+  protected readonly reportedAt = computed(() => {
+    const parcel = this.parcel();
+    return parcel?.report ? dayAndClock(parcel.report.at, parcel.destination.zone) : '';
   });
   protected readonly steps = computed(() => {
     const parcel = this.parcel();
