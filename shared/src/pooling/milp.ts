@@ -1,7 +1,7 @@
 import type { Column } from './columns';
 import { breedersOf } from './columns';
 import type { Instance, SlotInfo } from './instance';
-import type { Placement } from './plan';
+import { breedersIn, type Placement } from './plan';
 
 /** What a solver answers. `values` by variable name, zeros may be left out; null without a solution. */
 export interface MilpAnswer {
@@ -12,8 +12,12 @@ export interface MilpAnswer {
   readonly values: Readonly<Record<string, number>> | null;
 }
 
-/** Solves a model in CPLEX LP format to optimality or to the time limit. */
-export type SolveMilp = (lpText: string, limitSeconds: number) => MilpAnswer;
+/** Solves a model in CPLEX LP format to optimality or to the time limit, from a solution known already (zeros left out). */
+export type SolveMilp = (
+  lpText: string,
+  limitSeconds: number,
+  start?: Readonly<Record<string, number>>,
+) => MilpAnswer;
 
 const x = (parcel: number, slot: number) => `x${parcel}_${slot}`;
 const y = (slot: number, breederId: number) => `y${slot}_${breederId}`;
@@ -106,6 +110,27 @@ function wrap(terms: readonly string[]): string {
   const lines: string[] = [];
   for (let at = 0; at < terms.length; at += 8) lines.push(terms.slice(at, at + 8).join(' '));
   return lines.join('\n  ');
+}
+
+/** A placement as values of the model's variables, zeros left out; null when one of its runs is no column. */
+export function valuesOf(
+  instance: Instance,
+  columns: readonly Column[],
+  placement: Placement,
+): Readonly<Record<string, number>> | null {
+  const values: Record<string, number> = {};
+  placement.forEach((at, parcel) => (values[at === -1 ? `s${parcel}` : x(parcel, at)] = 1));
+  for (const slot of instance.slots) {
+    const ids = breedersIn(instance, placement, slot);
+    if (ids.length === 0) continue;
+    const index = columns.findIndex(
+      (column) => column.slot === slot.index && column.breederIds.join() === ids.join(),
+    );
+    if (index === -1) return null;
+    values[`l${index}`] = 1;
+    for (const id of ids) values[y(slot.index, id)] = 1;
+  }
+  return values;
 }
 
 /** Reads where each parcel rides out of a solver's values. */

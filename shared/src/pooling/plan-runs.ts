@@ -3,7 +3,7 @@ import { allColumns, columnOf, isSmall, someColumns, type Column } from './colum
 import { explainUnplaced, type UnplacedParcel } from './explain-unplaced';
 import { searchPlan } from './improve';
 import { createInstance, type Instance, type SlotInfo } from './instance';
-import { milpText, placementOf, type SolveMilp } from './milp';
+import { milpText, placementOf, valuesOf, type SolveMilp } from './milp';
 import { breedersIn, objectiveCents, type Placement } from './plan';
 import type { PoolProblem } from './problem';
 
@@ -44,7 +44,9 @@ export function planRuns(problem: PoolProblem, solveMilp: SolveMilp, options: Pl
     },
   });
   const columns = small ? allColumns(instance) : merge(seen, someColumns(instance));
-  const answer = columns.length === 0 ? null : solveMilp(milpText(instance, columns), options.milpSeconds);
+  const start = valuesOf(instance, columns, found) ?? undefined;
+  const answer =
+    columns.length === 0 ? null : solveMilp(milpText(instance, columns), options.milpSeconds, start);
   const solved = answer?.values ? placementOf(instance, answer.values) : null;
   const placement =
     solved && objectiveCents(instance, solved) < objectiveCents(instance, found) ? solved : found;
