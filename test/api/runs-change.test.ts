@@ -268,6 +268,21 @@ describe('PATCH /runs/:id', () => {
     expect(await site.run(run.id)).toEqual(run);
   });
 
+  it('lets a parcel be taken off a confirmed run whatever else is wrong with it', async () => {
+    const first = await site.booked(breeder, wednesday);
+    const second = await site.booked(otherBreeder, wednesday);
+    const run = await site.confirm(await site.byHand(wednesday, [first, second]));
+    const free = { daysAway: [], drivingDays: [{ date: wednesday, free: false }] };
+    await (await site.who(coordinator)).put('/api/me/availability').send(free).expect(200);
+    const answer = await patch(run, { removeParcelIds: [first.id] });
+    expect(answer.status).toBe(200);
+    expect(answer.body).toMatchObject({
+      problems: ['Cora Coordinator does not drive on Wednesday, December 2.'],
+    });
+    const third = await site.booked(breeder, wednesday);
+    expect((await patch(answer.body as Run, { addParcelIds: [third.id] })).status).toBe(409);
+  });
+
   it('never books an open parcel onto a confirmed run on a day that is not safe for it', async () => {
     const run = await site.confirm(await site.byHand(monday, [await site.booked(breeder, monday)]));
     const open = await site.seeking(otherBreeder, wednesday, monday);

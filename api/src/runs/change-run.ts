@@ -46,7 +46,9 @@ export async function changeRun(
   const after = await shown(tx, id);
   const problems = [...complaint, ...after.problems];
   if (isPreview) return { ...after, problems };
-  if (run.state === 'confirmed' && problems.length > 0)
+  // Taking off never breaks a drive, so what is wrong besides must not stand in its way.
+  const mayBreak = joining.length > 0 || after.parcels.length === 0;
+  if (run.state === 'confirmed' && mayBreak && problems.length > 0)
     throw new AppError(
       'conflict',
       `A confirmed run must stay one that can be driven. ${problems.join(' ')}`,
