@@ -23,16 +23,20 @@ describe('the run board', () => {
   });
 
   it('names the weeks', () => {
-    expect(boardWeeks([], [], today, weeks(3)).map((week) => week.title)).toEqual(['This week', 'Next week', 'Week of December 21']);
+    expect(boardWeeks([], [], today, weeks(3)).map((week) => week.title)).toEqual([
+      'This week',
+      'Next week',
+      'Week of December 21',
+    ]);
   });
 
   it('drops runs that were called off and sorts a day by departure', () => {
     const late = sampleRun({ id: 1, departAt: '2026-12-08T19:00:00.000Z' });
     const early = sampleRun({ id: 2, departAt: '2026-12-08T17:00:00.000Z' });
     const off = sampleRun({ id: 3, state: 'called-off' });
-    expect(boardWeeks([late, early, off], [], today, weeks(1))[0]?.days[0]?.runs.map((run) => run.id)).toEqual([
-      2, 1,
-    ]);
+    expect(
+      boardWeeks([late, early, off], [], today, weeks(1))[0]?.days[0]?.runs.map((run) => run.id),
+    ).toEqual([2, 1]);
   });
 
   it('says in words what an empty day means', () => {
@@ -57,7 +61,7 @@ describe('the run board', () => {
       [sampleRun(), sampleRun({ id: 2, date: '2026-12-10', state: 'confirmed' })],
       [],
       today,
-      1,
+      weeks(1),
     );
     expect(boardSummary(board, () => 'Tuesday')).toBe(
       '4 parcels are placed on 2 runs. The run on Tuesday waits for your word.',

@@ -20,6 +20,8 @@ export interface BoardWeek {
 
 /** Runs that are over are told on their own pages; the board shows the work. */
 const offBoard = new Set(['called-off']);
+/** Runs that are still to be driven: the figures and the summary are of these. */
+const toCome = new Set(['proposed', 'confirmed', 'underway']);
 
 /** Which weeks the board shows: from a Sunday on, so many. */
 export interface BoardSpan {
@@ -95,7 +97,9 @@ export const parcels = (count: number): string => `${count} ${count === 1 ? 'par
 
 /** The line under the board's title: what is placed, and which run waits for the coordinator's word. */
 export function boardSummary(weeks: readonly BoardWeek[], dayName: (date: string) => string): string {
-  const runs = weeks.flatMap((week) => week.days.flatMap((day) => day.runs));
+  const runs = weeks
+    .flatMap((week) => week.days.flatMap((day) => day.runs))
+    .filter((run) => toCome.has(run.state));
   if (runs.length === 0) return 'No run is planned yet.';
   const placed = runs.reduce((sum, run) => sum + run.parcels.length, 0);
   const next = runs.find((run) => run.state === 'proposed');

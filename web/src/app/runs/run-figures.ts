@@ -49,12 +49,21 @@ export function proposalFigures(proposal: Proposal): Figure[] {
 
 /** The figures of the runs as they stand, when nothing was proposed just now. */
 export function planFigures(runs: readonly Run[], waiting: number): Figure[] {
-  const live = runs.filter((run) => run.state === 'proposed' || run.state === 'confirmed' || run.state === 'underway');
-  const last = { value: String(waiting), label: waiting === 1 ? 'parcel not on a run' : 'parcels not on a run' };
+  const live = runs.filter(
+    (run) => run.state === 'proposed' || run.state === 'confirmed' || run.state === 'underway',
+  );
+  const last = {
+    value: String(waiting),
+    label: waiting === 1 ? 'parcel not on a run' : 'parcels not on a run',
+  };
   if (live.length === 0) return [last];
   const costCents = live.reduce((sum, run) => sum + run.costCents, 0);
   const aloneCents = live.reduce((sum, run) => sum + run.aloneCents, 0);
-  return [{ value: dollars(costCents), label: live.length === 1 ? 'for one run' : `for all ${live.length} runs` }, againstAlone(costCents, aloneCents), last];
+  return [
+    { value: dollars(costCents), label: live.length === 1 ? 'for one run' : `for all ${live.length} runs` },
+    againstAlone(costCents, aloneCents),
+    last,
+  ];
 }
 
 /** Share of a parcel on average, or null for an empty run. */

@@ -1,7 +1,15 @@
 import { HttpClient, HttpHeaders } from '@angular/common/http';
 import { inject, Injectable } from '@angular/core';
 import type { Observable } from 'rxjs';
-import type { CoordinatorSummary, Parcel, Proposal, Run, RunNew, RunPatch, RunPreview } from '@shared/contract';
+import type {
+  CoordinatorSummary,
+  Parcel,
+  Proposal,
+  Run,
+  RunNew,
+  RunPatch,
+  RunPreview,
+} from '@shared/contract';
 
 /** One parcel's tracking number, as it is written down at the counter. */
 export interface TrackingEntry {

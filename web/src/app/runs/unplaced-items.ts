@@ -19,11 +19,19 @@ export function unplacedItems(waiting: readonly Parcel[], spoken: readonly Unpla
   const known = new Set(waiting.map((parcel) => parcel.id));
   const own = waiting
     .filter((parcel) => parcel.run === null)
-    .toSorted((a, b) => (a.shipDate ?? '9999').localeCompare(b.shipDate ?? '9999') || a.code.localeCompare(b.code))
+    .toSorted(
+      (a, b) => (a.shipDate ?? '9999').localeCompare(b.shipDate ?? '9999') || a.code.localeCompare(b.code),
+    )
     .map((parcel) => fromParcel(parcel, reasons.get(parcel.id) ?? null));
   const others = spoken
     .filter((entry) => !known.has(entry.parcelId))
-    .map((entry) => ({ id: entry.parcelId, title: `${entry.code} to ${entry.destination}`, text: entry.text, help: entry.help, parcel: null }));
+    .map((entry) => ({
+      id: entry.parcelId,
+      title: `${entry.code} to ${entry.destination}`,
+      text: entry.text,
+      help: entry.help,
+      parcel: null,
+    }));
   return [...own, ...others];
 }
 

@@ -27,7 +27,19 @@ const weeksShown = 3;
 /** The coordinator's board: days across, runs in them, what is not placed at the side. */
 @Component({
   selector: 'db-run-board',
-  imports: [DayLabelPipe, EmptyState, MatButton, MatIcon, MatProgressBar, NextAction, PageHeader, ProblemNote, RouterLink, RunCard, UnplacedList],
+  imports: [
+    DayLabelPipe,
+    EmptyState,
+    MatButton,
+    MatIcon,
+    MatProgressBar,
+    NextAction,
+    PageHeader,
+    ProblemNote,
+    RouterLink,
+    RunCard,
+    UnplacedList,
+  ],
   templateUrl: './run-board.html',
   styleUrl: './run-board.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -43,19 +55,31 @@ export class RunBoard {
   private readonly start = computed(() => addDays(startOfWeek(this.today), this.offset() * weeksShown * 7));
   protected readonly board = rxResource({
     params: () => ({ from: this.start(), to: addDays(this.start(), weeksShown * 7 - 1) }),
-    stream: ({ params }) => forkJoin({ runs: this.api.list(params.from, params.to), waiting: this.api.waitingParcels() }),
+    stream: ({ params }) =>
+      forkJoin({ runs: this.api.list(params.from, params.to), waiting: this.api.waitingParcels() }),
   });
   protected readonly problem = computed(() => errorText(this.board.error()));
-  private readonly known = computed(() => (this.board.hasValue() ? this.board.value() : { runs: [], waiting: [] }));
+  private readonly known = computed(() =>
+    this.board.hasValue() ? this.board.value() : { runs: [], waiting: [] },
+  );
   protected readonly weeks = computed(() =>
-    boardWeeks(this.known().runs, this.known().waiting, this.today, { start: this.start(), count: weeksShown }).map((week) => ({
+    boardWeeks(this.known().runs, this.known().waiting, this.today, {
+      start: this.start(),
+      count: weeksShown,
+    }).map((week) => ({
       ...week,
       columns: boardColumns(week),
     })),
   );
-  protected readonly hasRuns = computed(() => this.weeks().some((week) => week.days.some((day) => day.runs.length > 0)));
-  protected readonly summary = computed(() => boardSummary(this.weeks(), (date) => dayLabel(date, 'weekday')));
-  protected readonly unplaced = computed(() => unplacedItems(this.known().waiting, this.proposal()?.unplaced ?? []));
+  protected readonly hasRuns = computed(() =>
+    this.weeks().some((week) => week.days.some((day) => day.runs.length > 0)),
+  );
+  protected readonly summary = computed(() =>
+    boardSummary(this.weeks(), (date) => dayLabel(date, 'weekday')),
+  );
+  protected readonly unplaced = computed(() =>
+    unplacedItems(this.known().waiting, this.proposal()?.unplaced ?? []),
+  );
   protected readonly figures = computed(() => {
     const proposal = this.proposal();
     if (proposal) return proposalFigures(proposal);

@@ -21,5 +21,7 @@ export class RunCard {
   protected readonly share = computed(() => sharePerParcel(this.run()));
   protected readonly slack = computed(() => slackText(this.run().slackMinutes));
   protected readonly firstName = computed(() => this.run().coordinator.name.split(' ')[0] ?? '');
-  protected readonly stops = computed(() => this.run().stops.map((stop) => ({ stop, text: stopText(stop, this.run()) })));
+  protected readonly stops = computed(() =>
+    this.run().stops.map((stop) => ({ stop, text: stopText(stop, this.run()) })),
+  );
 }

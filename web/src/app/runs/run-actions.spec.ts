@@ -1,0 +1,58 @@
+import { couldJoin, runActions, sharesOf, toldOnConfirmation } from './run-actions';
+import { sampleParcel, sampleRun } from './run-samples';
+
+describe('what can be done with a run', () => {
+  it('follows its state, the next thing first', () => {
+    const of = (state: 'proposed' | 'confirmed' | 'underway' | 'handed-over') =>
+      runActions(sampleRun({ state }), ['coordinator'])[0];
+    expect([of('proposed'), of('confirmed'), of('underway'), of('handed-over')]).toEqual([
+      'confirm',
+      'depart',
+      'hand-over',
+      undefined,
+    ]);
+  });
+
+  it('is looking only for a breeder', () => {
+    expect(runActions(sampleRun({ state: 'confirmed' }), ['breeder'])).toEqual([]);
+  });
+});
+
+describe('joining a run', () => {
+  const run = sampleRun({ date: '2026-12-08' });
+  const ids = (parcels: Parameters<typeof couldJoin>[0]) => couldJoin(parcels, run).map(({ id }) => id);
+
+  it('is for parcels booked on its day, or left open over it', () => {
+    expect(
+      ids([
+        sampleParcel({ id: 901, flexible: { from: '2026-12-07', to: '2026-12-09' } }),
+        sampleParcel({ id: 902, flexible: { from: '2026-12-09', to: '2026-12-11' } }),
+        sampleParcel({ id: 903, state: 'booked', flexible: null, shipDate: '2026-12-08' }),
+        sampleParcel({ id: 904, state: 'booked', flexible: null, shipDate: '2026-12-09' }),
+        sampleParcel({ id: 905, state: 'on-hold' }),
+      ]),
+    ).toEqual([901, 903]);
+  });
+
+  it('is not for a parcel on a confirmed run', () => {
+    const on = (state: string) => ({ id: 7, state, date: '2026-12-08', coordinatorName: 'Delia' });
+    expect(
+      ids([sampleParcel({ id: 906, run: on('confirmed') }), sampleParcel({ id: 907, run: on('proposed') })]),
+    ).toEqual([907]);
+  });
+});
+
+describe('the shares', () => {
+  it('are added up by breeder and come to the cost of the run', () => {
+    const run = sampleRun();
+    const shares = sharesOf(run);
+    expect(shares.reduce((sum, share) => sum + share.cents, 0)).toBe(
+      run.parcels.reduce((sum, parcel) => sum + parcel.shareCents, 0),
+    );
+    expect(new Set(shares.map((share) => share.breederId)).size).toBe(shares.length);
+  });
+});
+
+it('says whom a confirmation tells', () => {
+  expect(toldOnConfirmation(sampleRun())).toMatch(/breeders? and the buyers of \d+ parcels? get a mail/);
+});
