@@ -128,7 +128,7 @@ describe('Who hears of what', () => {
       {
         [cora]: [
           'Tuesday, December 8',
-          'leave at 8:30 AM',
+          '8:30 AM',
           '10:30 AM',
           'Third Draw Serpents',
           'TD-1',
@@ -150,7 +150,7 @@ describe('Who hears of what', () => {
     [
       'a handed-over run',
       () => ({ kind: 'run-handed-over', runId }),
-      { [bo]: ['on its way', 'TD-1', 'LK 123'], [uma]: ['on its way', 'CF-1'] },
+      { [bo]: ['On the way', 'TD-1', 'LK 123'], [uma]: ['On the way', 'CF-1'] },
     ],
     [
       'a buyer’s mornings',
@@ -180,7 +180,7 @@ describe('Who hears of what', () => {
       // Tags out and references back: what a person reads in the HTML.
       const shown = String(html)
         .replace(/<style>.*?<\/style>/s, '')
-        .replace(/<br>/g, ' ')
+        .replace(/<br>|&nbsp;/g, ' ')
         .replace(/<[^>]+>/g, '')
         .replace(/&#39;/g, "'");
       for (const fact of facts) {

@@ -33,7 +33,7 @@ export async function bookedLetter(deps: Deps, parcel: Parcel, arrivalDate: stri
   const planned = await plannedArrival(deps, parcel);
   return {
     subject: `Planned arrival: ${longDate(arrivalDate)}`,
-    lead: `Your ${what(parcel)} is planned to arrive`,
+    lead: `Planned arrival of your ${what(parcel)}`,
     large: dateLines(arrivalDate),
     paragraphs: [...(planned ? [whereAndWhen(planned)] : []), mayChange],
     facts: [
@@ -51,16 +51,16 @@ export function arrivalLetter(parcel: Parcel, planned: Planned, isNew: boolean):
   const { arrival, window } = planned;
   const { place } = arrival;
   return {
-    subject: `${isNew ? 'Arrives' : 'Now arrives'} ${longDate(window.date)}: ${what(parcel)}`,
-    lead: `Your ${what(parcel)} from ${shopOf(parcel)} ${isNew ? 'arrives' : 'now arrives'}`,
+    subject: `${isNew ? 'Arrival on' : 'New arrival on'} ${longDate(window.date)}: ${what(parcel)}`,
+    lead: `${isNew ? 'Arrival' : 'New arrival'} of your ${what(parcel)} from ${shopOf(parcel)}`,
     large: dateLines(window.date),
     paragraphs: [whereAndWhen(planned), mayChange],
     facts: [
       ['Place', `${place.name}\n${place.street}\n${place.city}, ${place.state} ${place.postalCode}`],
       ...(place.hours ? [['Hours', place.hours] as const] : []),
       ['Parcel', parcel.code],
-      ['Bring', arrival.bring.join('\n')],
     ],
+    list: { label: arrival.service === 'hold' ? 'Bring' : 'Have ready', items: arrival.bring },
     button: arrivalPage(parcel),
     planning: true,
     because: becauseBuyer(parcel),

@@ -85,11 +85,15 @@ export function arrivalEvent(arrival: Arrival, window: CollectionWindow, url: st
     start: window.from,
     end: atLeastAMinute(window.from, window.to),
     zone: place.zone,
-    summary: hold ? `Collect your ${withoutOne(arrival.what)}` : `Your ${withoutOne(arrival.what)} arrives`,
+    summary: hold
+      ? `Collect your ${withoutOne(arrival.what)}`
+      : `Be at your door: ${withoutOne(arrival.what)}`,
     description: [
       first,
       `Parcel ${arrival.code} from ${arrival.breederName}.`,
-      ...(arrival.bring.length > 0 ? [`Bring: ${arrival.bring.join('; ')}`] : []),
+      ...(arrival.bring.length > 0
+        ? [[hold ? 'Bring:' : 'Have ready:', ...arrival.bring.map((thing) => `- ${thing}`)].join('\n')]
+        : []),
       `Your page: ${url}`,
     ].join('\n'),
     location: `${place.name}, ${place.street}, ${place.city}, ${place.state} ${place.postalCode}`,

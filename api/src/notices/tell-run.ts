@@ -89,9 +89,11 @@ async function tellCoordinator(
     driver,
     {
       subject: `${message.isNew ? 'Run' : 'Changed run'} on ${longDate(run.date)}: leave at ${leave}`,
-      lead: `${message.isNew ? 'Your run' : 'Your run has changed'}: ${count(run.stops.length, 'stop')}, ${count(run.parcels.length, 'parcel')}`,
-      large: [longDate(run.date), `leave at ${leave}`],
-      paragraphs: [`All times are ${run.counter.city} time.`],
+      lead: message.isNew ? 'Your run is confirmed' : 'Your run has changed',
+      large: [longDate(run.date), `leave ${leave}`],
+      paragraphs: [
+        `${count(run.stops.length, 'stop')}, ${count(run.parcels.length, 'parcel')}. All times are ${run.counter.city} time.`,
+      ],
       steps: [
         ...run.stops.map((stop) => stopLine(run, stop, phones.get(stop.breederId))),
         `${clockTime(run.arriveAt, run.zone)} ${run.counter.name}: hand over before the cut-off at ${clockTime(run.cutOffAt, run.zone)}`,
@@ -203,8 +205,8 @@ async function takeBackArrival(deps: Deps, parcel: Parcel, key: string): Promise
 export async function runHandedOver(deps: Deps, run: Run): Promise<void> {
   for (const parcel of await deps.services.parcels.byIds(run.parcels.map(({ id }) => id)))
     await writeMail(deps, `run-handed-over:${run.id}:${parcel.id}`, parcel.buyer, {
-      subject: `On its way: ${what(parcel)}`,
-      lead: `Your ${what(parcel)} from ${shopOf(parcel)} is on its way`,
+      subject: `On the way: ${what(parcel)}`,
+      lead: `On the way: your ${what(parcel)} from ${shopOf(parcel)}`,
       large: parcel.arrivalDate ? dateLines(parcel.arrivalDate) : ['Handed over'],
       paragraphs: [
         'It has been handed over to the carrier. The carrier’s own tracking says more than we can from here on.',

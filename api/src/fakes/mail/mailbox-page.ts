@@ -16,12 +16,20 @@ ul{list-style:none;margin:0;padding:0}li{background:var(--paper);border:1px soli
 li a{font-weight:600;display:block;padding:4px 0}small{color:var(--ink-2);font-size:14px}
 form{display:flex;flex-wrap:wrap;gap:10px;margin:0 0 20px;align-items:end}label{display:block;font-size:14px}
 select,button{font:inherit;min-height:44px;border-radius:10px;border:1px solid var(--line);background:var(--paper);color:var(--ink);padding:0 12px;max-width:100%}
-iframe{width:100%;height:620px;border:1px solid var(--line);border-radius:14px;background:#fff}
+iframe{width:100%;height:860px;border:1px solid var(--line);border-radius:14px;background:#fff}
 pre{background:var(--paper);border:1px solid var(--line);border-radius:14px;padding:14px;white-space:pre-wrap;overflow-wrap:anywhere;font-size:14px}
 `;
 
 const page = (title: string, body: string) =>
   `<!doctype html><html lang="en"><head><meta charset="utf-8"><meta name="viewport" content="width=device-width, initial-scale=1"><title>${e(title)}</title><link rel="stylesheet" href="/style.css"></head><body><main>${body}</main></body></html>`;
+
+/** What a mail does to the calendar, in words. */
+function calendarWord({ calendar }: KeptMail): string {
+  if (calendar === null) return '';
+  return /^METHOD:CANCEL\r?$/m.test(calendar)
+    ? ', takes an entry out of the calendar'
+    : ', with a calendar invitation';
+}
 
 /** The list, newest first; `chosen` is the recipient it is narrowed to, empty for everybody. */
 export function listPage(shown: readonly KeptMail[], all: readonly KeptMail[], chosen: string): string {
@@ -32,7 +40,7 @@ export function listPage(shown: readonly KeptMail[], all: readonly KeptMail[], c
   const items = shown
     .map(
       (mail) =>
-        `<li><a href="/mail/${mail.id}">${e(mail.subject || '(no subject)')}</a><small>to ${e(mail.to.join(', '))}${mail.calendar ? ', with a calendar invitation' : ''}</small></li>`,
+        `<li><a href="/mail/${mail.id}">${e(mail.subject || '(no subject)')}</a><small>to ${e(mail.to.join(', '))}${calendarWord(mail)}</small></li>`,
     )
     .join('');
   return page(

@@ -28,21 +28,24 @@ export function htmlOf(parts: LetterParts): string {
 <p class="mark" style="margin:0 4px 14px;color:#1f6f68;font-weight:600;font-size:17px">Dayberth</p>
 <div class="card" style="background:#fffdf8;border:1px solid #ddd5c4;border-radius:16px;padding:26px 22px">
 <p class="soft" style="margin:0 0 4px;color:#51606b">${e(parts.lead)}</p>
-<h1 class="ink" style="margin:0 0 18px;color:#1d2b36;font-size:30px;font-weight:600;line-height:1.16;letter-spacing:-.02em">${largeOf(parts)}</h1>
+<h1 class="ink" style="margin:0 0 18px;color:#1d2b36;font-size:28px;font-weight:600;line-height:1.18;letter-spacing:-.02em">${largeOf(parts)}</h1>
 ${parts.paragraphs.map((text) => `<p style="margin:0 0 14px">${lines(text)}</p>`).join('\n')}
-${stepsOf(parts)}${factsOf(parts)}${buttonOf(parts)}${softOf(parts.calendarNote)}${noteOf(parts)}</div>
+${stepsOf(parts)}${factsOf(parts)}${listOf(parts)}${buttonOf(parts)}${softOf(parts.calendarNote)}${noteOf(parts)}</div>
 <p class="soft" style="margin:16px 4px 0;color:#51606b;font-size:13px;line-height:1.5">${e(parts.because)}</p>
 </div></body></html>`;
 }
 
-const lines = (text: string): string => escapeHtml(text).replaceAll('\n', '<br>');
+/** A time of day stays on one line with its half of the day. */
+const inline = (text: string): string => escapeHtml(text).replace(/(\d) (AM|PM)\b/gi, '$1&nbsp;$2');
+
+const lines = (text: string): string => inline(text).replaceAll('\n', '<br>');
 
 const largeOf = ({ large }: LetterParts): string =>
-  large.flatMap((line) => (line === undefined ? [] : [escapeHtml(line)])).join('<br>');
+  large.flatMap((line) => (line === undefined ? [] : [inline(line)])).join('<br>');
 
 function stepsOf({ steps = [] }: LetterParts): string {
   if (steps.length === 0) return '';
-  const items = steps.map((step) => `<li style="margin:0 0 8px;padding-left:4px">${escapeHtml(step)}</li>`);
+  const items = steps.map((step) => `<li style="margin:0 0 8px;padding-left:4px">${inline(step)}</li>`);
   return `<ol style="margin:0 0 16px;padding-left:22px">${items.join('')}</ol>\n`;
 }
 
@@ -53,6 +56,15 @@ function factsOf({ facts = [] }: LetterParts): string {
     `<tr><th class="soft rule" scope="row" style="text-align:left;vertical-align:top;font-weight:400;color:#51606b;padding:8px 14px 8px 0;border-top:1px solid #e7dfce;white-space:nowrap">${escapeHtml(label)}</th>` +
     `<td class="rule" style="vertical-align:top;padding:8px 0;border-top:1px solid #e7dfce;overflow-wrap:anywhere">${lines(value)}</td></tr>`;
   return `<table style="width:100%;border-collapse:collapse;margin:0 0 18px;font-size:15px">${facts.map(row).join('')}</table>\n`;
+}
+
+function listOf({ list }: LetterParts): string {
+  if (!list) return '';
+  const items = list.items.map((item) => `<li style="margin:0 0 6px;padding-left:4px">${inline(item)}</li>`);
+  return (
+    `<p class="soft" style="margin:0 0 6px;color:#51606b;font-size:15px">${escapeHtml(list.label)}</p>\n` +
+    `<ul style="margin:0 0 16px;padding-left:22px;font-size:15px">${items.join('')}</ul>\n`
+  );
 }
 
 /** The button, and its address in words for those whose program shows no links. */

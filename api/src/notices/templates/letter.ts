@@ -18,6 +18,8 @@ export interface LetterParts {
   readonly steps?: readonly string[];
   /** Facts as label and value. */
   readonly facts?: readonly (readonly [string, string])[];
+  /** Things to have ready, under one label. */
+  readonly list?: { readonly label: string; readonly items: readonly string[] };
   readonly button?: { readonly label: string; readonly url: string };
   /** What became of the calendar, in a sentence. */
   readonly calendarNote?: string;
@@ -37,13 +39,19 @@ export function letter(parts: LetterParts): Letter {
 
 function textOf(parts: LetterParts): string {
   const steps = (parts.steps ?? []).map((step, index) => `${index + 1}. ${step}`).join('\n');
-  const facts = (parts.facts ?? []).map(([label, value]) => `${label}: ${value}`).join('\n');
+  const facts = (parts.facts ?? [])
+    .map(([label, value]) => `${label}: ${value.replaceAll('\n', ', ')}`)
+    .join('\n');
+  const list = parts.list
+    ? [`${parts.list.label}:`, ...parts.list.items.map((item) => `- ${item}`)].join('\n')
+    : '';
   const blocks = [
     parts.lead,
     largeText(parts),
     ...parts.paragraphs,
     steps,
     facts,
+    list,
     parts.button ? `${parts.button.label}: ${parts.button.url}` : '',
     parts.calendarNote ?? '',
     parts.planning ? planningNote : '',
