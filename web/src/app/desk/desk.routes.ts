@@ -1,3 +1,5 @@
 import type { Routes } from '@angular/router';
 
-export const routes: Routes = [];
+export const routes: Routes = [
+  { path: '', title: 'Desk', loadComponent: () => import('./desk-page/desk-page').then((m) => m.DeskPage) },
+];

@@ -1,12 +1,11 @@
 import { BreakpointObserver } from '@angular/cdk/layout';
 import {
-  afterNextRender,
+  ApplicationRef,
   ChangeDetectionStrategy,
   Component,
   computed,
   ElementRef,
   inject,
-  Injector,
   linkedSignal,
   signal,
 } from '@angular/core';
@@ -57,7 +56,7 @@ export class BlackoutsPage {
   private readonly api = inject(BlackoutsApi);
   private readonly session = inject(SessionStore);
   private readonly host = inject<ElementRef<HTMLElement>>(ElementRef);
-  private readonly injector = inject(Injector);
+  private readonly app = inject(ApplicationRef);
 
   protected readonly icons = scopeIcons;
   protected readonly canEdit = computed(() => this.session.has('admin'));
@@ -112,11 +111,10 @@ export class BlackoutsPage {
     if (!this.months().includes(month))
       this.show(month < this.first() ? month : addMonths(month, 1 - this.months().length));
     this.chosen.set(date);
-    if (byKey)
-      afterNextRender(
-        { read: () => this.host.nativeElement.querySelector<HTMLElement>(`[data-date="${date}"]`)?.focus() },
-        { injector: this.injector },
-      );
+    if (!byKey) return;
+    // Keys come faster than frames: the new day has to stand there, focused, before the next key arrives.
+    this.app.tick();
+    this.host.nativeElement.querySelector<HTMLElement>(`[data-date="${date}"]`)?.focus();
   }
 
   protected again(): void {

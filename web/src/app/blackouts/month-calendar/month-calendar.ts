@@ -15,6 +15,7 @@ const sundayFirst = [...weekdays.slice(6), ...weekdays.slice(0, 6)];
   imports: [MatIcon],
   templateUrl: './month-calendar.html',
   styleUrl: './month-calendar.scss',
+  host: { '(keydown)': 'onKey($event)' },
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class MonthCalendar {
