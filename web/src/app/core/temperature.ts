@@ -13,12 +13,15 @@ export const temperatureText = (valueF: number, unit: TemperatureUnit): string =
 export const rangeText = (range: { lowF: number; highF: number }, unit: TemperatureUnit): string =>
   `${degrees(range.lowF, unit)} to ${temperatureText(range.highF, unit)}`;
 
+/** A difference of temperatures in °C to the tenth, from °F: unlike a temperature it has no zero to shift. */
+const differenceC = (differenceF: number): number => Math.round((differenceF * 50) / 9) / 10;
+
 /** Reads a sentence with temperatures in °F (as the API writes them) in the person's unit. */
 export function sentenceInUnit(text: string, unit: TemperatureUnit): string {
   if (unit === 'F') return text;
   const differences = text.replace(
-    /(-?\d+(?:\.\d+)?) °F (inside|above|below|under|over|outside|warmer|colder)/g,
-    (_all, value: string, word: string) => `${Math.round((Number(value) * 5) / 9)} °C ${word}`,
+    /(-?\d+(?:\.\d+)?) °F (inside|above|below|under|over|outside|off|warmer|colder)/g,
+    (_all, value: string, word: string) => `${differenceC(Number(value))} °C ${word}`,
   );
   return differences
     .replace(

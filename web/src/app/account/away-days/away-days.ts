@@ -1,5 +1,10 @@
 import { ChangeDetectionStrategy, Component, computed, inject, input, output } from '@angular/core';
-import { NonNullableFormBuilder, ReactiveFormsModule, Validators } from '@angular/forms';
+import {
+  type FormGroupDirective,
+  NonNullableFormBuilder,
+  ReactiveFormsModule,
+  Validators,
+} from '@angular/forms';
 import { MatIconButton } from '@angular/material/button';
 import { MatFormFieldModule } from '@angular/material/form-field';
 import { MatIcon } from '@angular/material/icon';
@@ -47,7 +52,7 @@ export class AwayDays {
       .map((span) => ({ span, text: spanText(span) })),
   );
 
-  protected async add(): Promise<void> {
+  protected async add(entry: FormGroupDirective): Promise<void> {
     this.form.markAllAsTouched();
     if (this.form.invalid || this.saving.busy()) return;
     const { from, to, note } = this.form.getRawValue();
@@ -60,7 +65,7 @@ export class AwayDays {
     };
     const saved = await this.saving.save(this.api.setAvailability(next), this.form, rename);
     if (!saved) return;
-    this.form.reset();
+    entry.resetForm();
     this.changed.emit(saved);
   }
 

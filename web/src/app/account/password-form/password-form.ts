@@ -1,5 +1,10 @@
 import { ChangeDetectionStrategy, Component, inject, signal } from '@angular/core';
-import { NonNullableFormBuilder, ReactiveFormsModule, Validators } from '@angular/forms';
+import {
+  type FormGroupDirective,
+  NonNullableFormBuilder,
+  ReactiveFormsModule,
+  Validators,
+} from '@angular/forms';
 import { MatButton } from '@angular/material/button';
 import { MatFormFieldModule } from '@angular/material/form-field';
 import { MatInput } from '@angular/material/input';
@@ -27,14 +32,15 @@ export class PasswordForm {
   protected readonly isDone = signal(false);
   protected readonly isShown = signal(false);
 
-  protected async save(): Promise<void> {
+  protected async save(entry: FormGroupDirective): Promise<void> {
     this.form.markAllAsTouched();
     if (this.form.invalid || this.saving.busy()) return;
     this.isDone.set(false);
     // The answer has no body: null is what success looks like, so it is told from failure by the message.
     await this.saving.save(this.api.changePassword(this.form.getRawValue()), this.form);
     if (this.saving.message() !== null) return;
-    this.form.reset();
+    // Not the form alone: the fields would go on complaining that they are empty.
+    entry.resetForm();
     this.isDone.set(true);
   }
 }

@@ -1,5 +1,10 @@
 import { ChangeDetectionStrategy, Component, computed, inject, input, output } from '@angular/core';
-import { NonNullableFormBuilder, ReactiveFormsModule, Validators } from '@angular/forms';
+import {
+  type FormGroupDirective,
+  NonNullableFormBuilder,
+  ReactiveFormsModule,
+  Validators,
+} from '@angular/forms';
 import { MatIconButton } from '@angular/material/button';
 import { MatFormFieldModule } from '@angular/material/form-field';
 import { MatIcon } from '@angular/material/icon';
@@ -48,7 +53,7 @@ export class SingleDays {
       })),
   );
 
-  protected async add(): Promise<void> {
+  protected async add(entry: FormGroupDirective): Promise<void> {
     this.form.markAllAsTouched();
     if (this.form.invalid || this.saving.busy()) return;
     const next = withDrivingDay(this.availability(), this.form.getRawValue());
@@ -57,7 +62,7 @@ export class SingleDays {
       [`drivingDays.${index}.date`]: 'date',
     });
     if (!saved) return;
-    this.form.reset();
+    entry.resetForm();
     this.changed.emit(saved);
   }
 

@@ -72,6 +72,8 @@ export class DayChoice {
   readonly takeOff = output();
   readonly leaveOpen = output();
   readonly again = output();
+  /** Another day is looked at: what was said of the last one is over. */
+  readonly looked = output();
   private readonly reasons = viewChild<ElementRef<HTMLElement>>('reasons');
 
   protected readonly words = new FormControl('', {
@@ -100,6 +102,7 @@ export class DayChoice {
 
   protected look(date: string): void {
     this.chosen.set(date);
+    this.looked.emit();
     revealOnPhone(this.reasons()?.nativeElement);
   }
 

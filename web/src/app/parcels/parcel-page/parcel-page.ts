@@ -185,6 +185,11 @@ export class ParcelPage {
     if (isSure) await this.change(parcel, { state: 'cancelled' });
   }
 
+  /** A stale page stays stale, whatever day is looked at. */
+  protected forgetRefusal(): void {
+    if (!this.isStale()) this.booking.say(null);
+  }
+
   protected reload(): void {
     this.isStale.set(false);
     this.refused.set(null);
