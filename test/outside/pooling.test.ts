@@ -11,7 +11,8 @@ import { objectiveCents, type Placement } from '@shared/pooling/plan';
 import { planOf, planRuns, type PlanOptions } from '@shared/pooling/plan-runs';
 import type { PoolProblem } from '@shared/pooling/problem';
 import { cheapestPlanByHand, faultsByHand } from '../support/plan-by-hand';
-import { cheapestByHand, legsOf } from '../support/by-hand';
+import { timeline } from '@shared/pooling/timeline';
+import { arrival, cheapestByHand, found, legsOf } from '../support/by-hand';
 import { poolCase, weekDays, type CaseSize } from '../support/pooling-cases';
 
 const options: PlanOptions = { seed: 1, rounds: 40, shouldStop: () => false, milpSeconds: 5 };
@@ -96,7 +97,15 @@ function holds(problem: PoolProblem, plan: ReturnType<typeof planOf>): void {
   expect(named.toSorted((a, b) => a - b)).toEqual(problem.parcels.map(({ id }) => id));
   const days = plan.runs.map((run) => `${run.coordinatorId} ${run.date}`);
   expect(new Set(days).size).toBe(days.length);
-  for (const run of plan.runs) expect(faultsByHand(problem, run)).toEqual([]);
+  for (const run of plan.runs) {
+    expect(faultsByHand(problem, run)).toEqual([]);
+    const stops = run.order.map((id) => found(problem.breeders, id));
+    const driver = found(problem.coordinators, run.coordinatorId);
+    const counter = found(problem.counters, run.counterId);
+    const clock = timeline(driver, stops, counter, run.departMinute, problem.costs.circuity);
+    const order = run.order.map((_, index) => index);
+    expect(clock.arriveMinute).toBe(arrival(legsOf(problem, run, run.order), order, run.departMinute));
+  }
 }
 
 describe('whatever the input', () => {

@@ -104,6 +104,19 @@ describe('the best order of the stops', () => {
     },
   );
 
+  it('is right in six hundred more cases with narrow windows and little time', () => {
+    for (let seed = 5000; seed < 5600; seed++) {
+      const wide = randomRun(seed, 5);
+      const problem = {
+        ...wide,
+        stops: wide.stops.map((stop) => ({ ...stop, closeMinute: stop.openMinute + 40 + (seed % 3) * 30 })),
+        latestArriveMinute: 400,
+        longestMinutes: 110 + (seed % 10) * 15,
+      };
+      expect(bestPath(problem)?.cents ?? Infinity).toBeCloseTo(cheapestByHand(problem), 6);
+    }
+  });
+
   it('has both kinds among these cases: runs that can be driven and runs that cannot', () => {
     const paths = cases.map(({ seed, stops }) => bestPath(randomRun(seed, stops)));
     expect(paths.filter((path) => path === null).length).toBeGreaterThan(5);
