@@ -28,6 +28,8 @@ afterEach(() => site.close());
 
 type Step = 'confirmation' | 'departure' | 'hand-over' | 'call-off';
 const step = async (run: { id: number; version?: number }, name: Step, body: object = {}) => {
+  // A driver leaves on the day: Wednesday at noon in Texas.
+  if (name === 'departure') site.setNow('2026-12-02T18:00:00.000Z');
   const call = (await site.who(coordinator)).post(`/api/runs/${run.id}/${name}`);
   if (run.version !== undefined) void call.set('If-Match', `"${run.version}"`);
   return call.send(body);
@@ -196,6 +198,16 @@ describe('the drive', () => {
     const empty = await step(underway, 'hand-over', { tracking: [{ parcelId: mine.id, number: ' ' }] });
     expect(empty.status).toBe(400);
     expect(await states()).toEqual(['aboard', 'aboard']);
+  });
+});
+
+describe('a departure', () => {
+  it('is not before the day of the run', async () => {
+    const run = await site.confirm(proposed);
+    const answer = await (await site.who(coordinator)).post(`/api/runs/${run.id}/departure`).send({});
+    expect(answer.status).toBe(409);
+    expect(answer.body.detail).toContain('Wednesday, December 2');
+    expect(await states()).toEqual(['booked', 'booked']);
   });
 });
 

@@ -62,6 +62,8 @@ export async function departRun(
   aboardIds: readonly number[] | undefined,
 ): Promise<Run> {
   const run = await readForChange(tx, id, ifMatch, ['confirmed']);
+  if (run.date > tx.clock.today(run.zone))
+    throw new AppError('conflict', `It goes on ${longDate(run.date)}, not before.`);
   const aboard = new Set(aboardIds ?? run.parcels.map((parcel) => parcel.id));
   const left = run.parcels.filter((parcel) => !aboard.has(parcel.id)).map((parcel) => parcel.id);
   const unknown = notOn(run, aboardIds ?? [], (index) => `aboardParcelIds.${index}`);

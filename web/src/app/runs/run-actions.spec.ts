@@ -4,7 +4,7 @@ import { sampleParcel, sampleRun } from './run-samples';
 describe('what can be done with a run', () => {
   it('follows its state, the next thing first', () => {
     const of = (state: 'proposed' | 'confirmed' | 'underway' | 'handed-over') =>
-      runActions(sampleRun({ state }), ['coordinator'])[0];
+      runActions(sampleRun({ state }), ['coordinator'], '2026-12-08')[0];
     expect([of('proposed'), of('confirmed'), of('underway'), of('handed-over')]).toEqual([
       'confirm',
       'depart',
@@ -14,7 +14,13 @@ describe('what can be done with a run', () => {
   });
 
   it('is looking only for a breeder', () => {
-    expect(runActions(sampleRun({ state: 'confirmed' }), ['breeder'])).toEqual([]);
+    expect(runActions(sampleRun({ state: 'confirmed' }), ['breeder'], '2026-12-08')).toEqual([]);
+  });
+
+  it('does not let the driver leave before the day', () => {
+    expect(runActions(sampleRun({ state: 'confirmed' }), ['coordinator'], '2026-12-07')).not.toContain(
+      'depart',
+    );
   });
 });
 

@@ -11,9 +11,11 @@ const byState: Readonly<Record<RunState, readonly RunAction[]>> = {
   'called-off': [],
 };
 
-/** What somebody may do with a run as it stands, the next thing first; breeders only look. */
-export const runActions = (run: Run, roles: readonly Role[]): readonly RunAction[] =>
-  roles.some((role) => role === 'coordinator' || role === 'admin') ? byState[run.state] : [];
+/** What somebody may do with a run as it stands, the next thing first; breeders only look, and nobody leaves before its day. */
+export function runActions(run: Run, roles: readonly Role[], today: string): readonly RunAction[] {
+  if (!roles.some((role) => role === 'coordinator' || role === 'admin')) return [];
+  return byState[run.state].filter((action) => action !== 'depart' || run.date <= today);
+}
 
 /** What a run waits for, in a line under its title. */
 export function runNeed(run: Run): string {

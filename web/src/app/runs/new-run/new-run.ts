@@ -39,7 +39,8 @@ import { RunsApi } from '../runs-api';
     .fields {
       max-width: 560px;
       display: grid;
-      gap: 6px;
+      gap: 16px;
+      margin-bottom: 20px;
     }
     @media (max-width: 760px) {
       :host {

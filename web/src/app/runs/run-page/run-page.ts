@@ -29,6 +29,7 @@ import { confirmed } from '../../ui/confirm-dialog/confirm-dialog';
 import { MoneyPipe } from '../../ui/money-pipe';
 import { NextAction } from '../../ui/next-action/next-action';
 import { PageHeader } from '../../ui/page-header/page-header';
+import { dateIn } from '../../ui/plain-dates';
 import { PlanningAid } from '../../ui/planning-aid/planning-aid';
 import { ProblemNote } from '../../ui/problem-note/problem-note';
 import { RunMap } from '../../ui/run-map/run-map';
@@ -84,7 +85,9 @@ export class RunPage {
   protected readonly run = computed(() => (this.loading.hasValue() ? this.loading.value() : null));
   protected readonly problem = computed(() => errorText(this.loading.error()));
   protected readonly isDriver = computed(() => this.session.has('coordinator', 'admin'));
-  protected readonly actions = computed(() => this.ofRun((run) => runActions(run, this.session.roles()), []));
+  protected readonly actions = computed(() =>
+    this.ofRun((run) => runActions(run, this.session.roles(), dateIn(run.zone, new Date())), []),
+  );
   private readonly waiting = rxResource({
     params: () => ({ asks: this.can('change'), version: this.run()?.version }),
     stream: ({ params }) => (params.asks ? this.api.waitingParcels() : of([])),

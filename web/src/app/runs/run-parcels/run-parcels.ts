@@ -1,3 +1,4 @@
+import { DecimalPipe } from '@angular/common';
 import { ChangeDetectionStrategy, Component, input, output } from '@angular/core';
 import { MatIconButton } from '@angular/material/button';
 import { MatIcon } from '@angular/material/icon';
@@ -12,13 +13,16 @@ export type ParcelWish = 'pin' | 'unpin' | 'take-off';
 /** The parcels of a run with their share; those who plan it may pin one or take it off. */
 @Component({
   selector: 'db-run-parcels',
-  imports: [MatIcon, MatIconButton, MatMenuModule, MoneyPipe, RouterLink, VerdictChip],
+  imports: [DecimalPipe, MatIcon, MatIconButton, MatMenuModule, MoneyPipe, RouterLink, VerdictChip],
   template: `<ul>
     @for (parcel of run().parcels; track parcel.id) {
       <li>
         <div class="what">
           <a [routerLink]="['/parcels', parcel.id]">{{ parcel.code }}, {{ parcel.what }}</a>
-          <small>{{ parcel.breederName }} to {{ parcel.destination }}, {{ parcel.volumeL }} L</small>
+          <small
+            >{{ parcel.breederName }} to {{ parcel.destination }},
+            {{ parcel.volumeL | number: '1.0-1' }} L</small
+          >
         </div>
         @if (parcel.pinned) {
           <span class="pin"><mat-icon svgIcon="pin" aria-hidden="true" />pinned</span>

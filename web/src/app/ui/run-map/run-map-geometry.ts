@@ -84,7 +84,7 @@ function labelled(points: readonly Bare[], size: MapSize): MapPoint[] {
   const taken: { x: number; y: number }[] = [];
   return points.map((point) => {
     const anchor = point.x > size.width * 0.6 ? ('end' as const) : ('start' as const);
-    const labelX = anchor === 'start' ? point.x + 17 : point.x - 17;
+    const labelX = anchor === 'start' ? point.x + 20 : point.x - 20;
     let labelY = point.y + 5;
     while (taken.some((other) => Math.abs(other.y - labelY) < lineHeight && Math.abs(other.x - labelX) < 130))
       labelY += lineHeight;

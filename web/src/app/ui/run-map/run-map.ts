@@ -18,7 +18,7 @@ const size = { width: 640, height: 360, padding: 44 };
           <circle class="start" [attr.cx]="point.x" [attr.cy]="point.y" r="6" />
         }
         @case ('stop') {
-          <circle class="stop" [attr.cx]="point.x" [attr.cy]="point.y" r="12" />
+          <circle class="stop" [attr.cx]="point.x" [attr.cy]="point.y" r="11" />
           <text class="seq" [attr.x]="point.x" [attr.y]="point.y + 5" text-anchor="middle">
             {{ point.seq }}
           </text>
@@ -39,6 +39,7 @@ const size = { width: 640, height: 360, padding: 44 };
   styles: `
     :host {
       display: block;
+      margin-top: 12px;
     }
     svg {
       display: block;
