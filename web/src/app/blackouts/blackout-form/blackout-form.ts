@@ -3,6 +3,7 @@ import {
   Component,
   computed,
   effect,
+  ElementRef,
   inject,
   input,
   signal,
@@ -21,11 +22,12 @@ import { MatOption, MatSelect } from '@angular/material/select';
 import { MatSnackBar } from '@angular/material/snack-bar';
 import { Router } from '@angular/router';
 import { map, of, startWith } from 'rxjs';
-import type { Blackout } from '@shared/contract';
+import type { Blackout, BlackoutPreview } from '@shared/contract';
 import { DayLabelPipe } from '../../core/day-label-pipe';
 import { FieldMessagePipe } from '../../core/http/field-message-pipe';
 import { SessionStore } from '../../core/session/session-store';
 import { errorText } from '../../ui/call-state';
+import { focusFirstError } from '../../ui/focus-first-error';
 import { NextAction } from '../../ui/next-action/next-action';
 import { PageHeader } from '../../ui/page-header/page-header';
 import { dateIn } from '../../ui/plain-dates';
@@ -72,6 +74,7 @@ export class BlackoutForm implements HasUnsavedChanges {
   private readonly dialog = inject(MatDialog);
   private readonly router = inject(Router);
   private readonly snack = inject(MatSnackBar);
+  private readonly host = inject<ElementRef<HTMLElement>>(ElementRef);
 
   /** From the path; none for a new one. */
   readonly id = input<string>();
@@ -158,16 +161,14 @@ export class BlackoutForm implements HasUnsavedChanges {
 
   protected async save(): Promise<void> {
     this.form.markAllAsTouched();
-    if (this.form.invalid || this.saving.busy()) return;
+    if (this.saving.busy()) return;
+    if (this.form.invalid) return focusFirstError(this.host.nativeElement);
     const seen = this.seen();
     const body = bodyOf(this.form, seen);
     const renamed = renamedFields(this.form);
     const preview = await this.saving.save(this.api.preview(body, seen?.id), this.form, renamed);
-    if (
-      !preview ||
-      !(await movesAccepted(this.dialog, { title: `Save “${body.title}”?`, preview, isRemoval: false }))
-    )
-      return;
+    if (!preview) return focusFirstError(this.host.nativeElement);
+    if (!(await this.isAccepted(`Save “${body.title}”?`, preview, false))) return;
     const call = seen ? this.api.change(seen, body) : this.api.add(body);
     const saved = await this.saving.save(call, this.form, renamed);
     if (saved) await this.leave(`“${saved.title}” is saved.`);
@@ -175,11 +176,7 @@ export class BlackoutForm implements HasUnsavedChanges {
 
   protected async remove(seen: Blackout): Promise<void> {
     const preview = await this.saving.save(this.api.preview(null, seen.id), this.form);
-    if (
-      !preview ||
-      !(await movesAccepted(this.dialog, { title: `Remove “${seen.title}”?`, preview, isRemoval: true }))
-    )
-      return;
+    if (!preview || !(await this.isAccepted(`Remove “${seen.title}”?`, preview, true))) return;
     const call = this.api.remove(seen).pipe(map(() => true));
     if (await this.saving.save(call, this.form)) await this.leave(`“${seen.title}” is removed.`);
   }
@@ -188,6 +185,10 @@ export class BlackoutForm implements HasUnsavedChanges {
     this.saving.clear();
     this.loaded.reload();
     this.named.reload();
+  }
+
+  private isAccepted(title: string, preview: BlackoutPreview, isRemoval: boolean): Promise<boolean> {
+    return movesAccepted(this.dialog, { title, preview, isRemoval });
   }
 
   private begin(): void {

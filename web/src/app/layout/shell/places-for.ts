@@ -13,9 +13,9 @@ const places: readonly (NavPlace & { readonly roles: readonly Role[] })[] = [
   { path: '/runs', label: 'Runs', icon: 'van', roles: ['breeder', 'coordinator', 'admin'] },
   { path: '/my-arrivals', label: 'My arrivals', icon: 'bell', roles: ['buyer'] },
   { path: '/blackouts', label: 'Calendar', icon: 'calendar', roles: ['breeder', 'coordinator', 'admin'] },
-  { path: '/counters', label: 'Counters', icon: 'counter', roles: ['admin'] },
-  { path: '/species', label: 'Species', icon: 'species', roles: ['admin'] },
-  { path: '/boxes', label: 'Boxes', icon: 'box', roles: ['admin'] },
+  { path: '/counters', label: 'Counters', icon: 'counter', roles: ['coordinator', 'admin'] },
+  { path: '/species', label: 'Species', icon: 'species', roles: ['coordinator', 'admin'] },
+  { path: '/boxes', label: 'Boxes', icon: 'box', roles: ['coordinator', 'admin'] },
   { path: '/people', label: 'People', icon: 'people', roles: ['admin'] },
 ];
 

@@ -4,6 +4,7 @@ import {
   Component,
   computed,
   effect,
+  ElementRef,
   inject,
   input,
   signal,
@@ -26,6 +27,7 @@ import type { Counter, Person } from '@shared/contract';
 import { FieldMessagePipe } from '../../core/http/field-message-pipe';
 import { errorText } from '../../ui/call-state';
 import { confirmed } from '../../ui/confirm-dialog/confirm-dialog';
+import { focusFirstError } from '../../ui/focus-first-error';
 import { NextAction } from '../../ui/next-action/next-action';
 import { PageHeader } from '../../ui/page-header/page-header';
 import { ProblemNote } from '../../ui/problem-note/problem-note';
@@ -73,6 +75,7 @@ export class PersonForm implements HasUnsavedChanges {
   private readonly http = inject(HttpClient);
   private readonly router = inject(Router);
   private readonly snack = inject(MatSnackBar);
+  private readonly host = inject<ElementRef<HTMLElement>>(ElementRef);
   private readonly dialog = inject(MatDialog);
 
   /** From the path; none for a new one. */
@@ -120,7 +123,8 @@ export class PersonForm implements HasUnsavedChanges {
   constructor() {
     effect(() => {
       const seen = this.seen();
-      if (seen) untracked(() => fillPerson(this.form, seen));
+      // Switching somebody on or off brings a new version, but must not lose what is being typed.
+      if (seen && !this.form.dirty) untracked(() => fillPerson(this.form, seen));
     });
     followRoles(this.form);
     this.form.controls.roles.valueChanges.pipe(takeUntilDestroyed()).subscribe(() => {
@@ -141,13 +145,13 @@ export class PersonForm implements HasUnsavedChanges {
     this.form.markAllAsTouched();
     if (this.saving.busy()) return;
     this.roleProblem.set(rolesOf(this.form).length === 0 ? 'Choose at least one role.' : '');
-    if (this.form.invalid || this.roleProblem()) return this.saving.say('Please correct the marked fields.');
+    if (this.form.invalid || this.roleProblem()) return this.refuse();
     const seen = this.seen();
     const call = seen
       ? this.http.patch<Person>(`/api/people/${seen.id}`, personPatchBody(this.form), onVersion(seen))
       : this.http.post<Person>('/api/people', personNewBody(this.form));
     const saved = await this.saving.save(call, this.form, personRenames);
-    if (!saved) return;
+    if (!saved) return focusFirstError(this.host.nativeElement);
     this.isDone.set(true);
     this.say(seen ? `${saved.name} is saved.` : `${saved.name} was sent an invitation.`);
     await this.router.navigateByUrl('/people');
@@ -172,11 +176,17 @@ export class PersonForm implements HasUnsavedChanges {
     const saved = await this.saving.save(call, this.form);
     if (!saved) return;
     this.say(`${saved.name} is switched ${active ? 'on' : 'off'}.`);
-    this.loaded.reload();
+    this.loaded.set(saved);
+  }
+
+  private refuse(): void {
+    this.saving.say('Please correct the marked fields.');
+    focusFirstError(this.host.nativeElement);
   }
 
   protected again(): void {
     this.saving.clear();
+    this.form.markAsPristine();
     this.loaded.reload();
     this.listed.reload();
   }

@@ -3,6 +3,7 @@ import {
   Component,
   computed,
   effect,
+  ElementRef,
   inject,
   input,
   signal,
@@ -20,6 +21,7 @@ import { Router } from '@angular/router';
 import { map, of, startWith } from 'rxjs';
 import { FieldMessagePipe } from '../../core/http/field-message-pipe';
 import { errorText } from '../../ui/call-state';
+import { focusFirstError } from '../../ui/focus-first-error';
 import { NextAction } from '../../ui/next-action/next-action';
 import { PageHeader } from '../../ui/page-header/page-header';
 import { ProblemNote } from '../../ui/problem-note/problem-note';
@@ -54,6 +56,7 @@ export class BoxForm implements HasUnsavedChanges {
   private readonly api = inject(PlacesApi);
   private readonly router = inject(Router);
   private readonly snack = inject(MatSnackBar);
+  private readonly host = inject<ElementRef<HTMLElement>>(ElementRef);
   private readonly build = inject(NonNullableFormBuilder);
 
   /** From the path; none for a new one. */
@@ -105,12 +108,17 @@ export class BoxForm implements HasUnsavedChanges {
   protected async save(): Promise<void> {
     this.form.markAllAsTouched();
     if (this.saving.busy()) return;
-    if (this.form.invalid) return this.saving.say('Please correct the marked fields.');
+    if (this.form.invalid) return this.refuse();
     const saved = await this.saving.save(this.api.saveBox(this.seen(), this.form.getRawValue()), this.form);
-    if (!saved) return;
+    if (!saved) return focusFirstError(this.host.nativeElement);
     this.isDone.set(true);
     this.snack.open(`${saved.name} is saved.`, undefined, { duration: 4000 });
     await this.router.navigateByUrl('/boxes');
+  }
+
+  private refuse(): void {
+    this.saving.say('Please correct the marked fields.');
+    focusFirstError(this.host.nativeElement);
   }
 
   protected again(): void {

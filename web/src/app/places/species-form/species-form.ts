@@ -3,6 +3,7 @@ import {
   Component,
   computed,
   effect,
+  ElementRef,
   inject,
   input,
   signal,
@@ -21,6 +22,7 @@ import { map, of, startWith } from 'rxjs';
 import { FieldMessagePipe } from '../../core/http/field-message-pipe';
 import { UnitPreference } from '../../core/unit-preference';
 import { errorText } from '../../ui/call-state';
+import { focusFirstError } from '../../ui/focus-first-error';
 import { NextAction } from '../../ui/next-action/next-action';
 import { PageHeader } from '../../ui/page-header/page-header';
 import { ProblemNote } from '../../ui/problem-note/problem-note';
@@ -55,6 +57,7 @@ export class SpeciesForm implements HasUnsavedChanges {
   private readonly api = inject(PlacesApi);
   private readonly router = inject(Router);
   private readonly snack = inject(MatSnackBar);
+  private readonly host = inject<ElementRef<HTMLElement>>(ElementRef);
 
   /** From the path; none for a new one. */
   readonly id = input<string>();
@@ -108,16 +111,21 @@ export class SpeciesForm implements HasUnsavedChanges {
   protected async save(): Promise<void> {
     this.form.markAllAsTouched();
     if (this.saving.busy()) return;
-    if (this.form.invalid) return this.saving.say('Please correct the marked fields.');
+    if (this.form.invalid) return this.refuse();
     const seen = this.seen();
     const saved = await this.saving.save(
       this.api.saveSpecies(seen, speciesBody(this.form, this.unit, seen)),
       this.form,
     );
-    if (!saved) return;
+    if (!saved) return focusFirstError(this.host.nativeElement);
     this.isDone.set(true);
     this.snack.open(`The ${saved.commonName} is saved.`, undefined, { duration: 4000 });
     await this.router.navigateByUrl('/species');
+  }
+
+  private refuse(): void {
+    this.saving.say('Please correct the marked fields.');
+    focusFirstError(this.host.nativeElement);
   }
 
   protected again(): void {
