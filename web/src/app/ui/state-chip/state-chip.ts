@@ -52,7 +52,8 @@ import { parcelWords, runWords, type StateWord } from './state-words';
 })
 export class StateChip {
   readonly parcel = input<ParcelState>();
-  readonly run = input<RunState | string>();
+  /** A run state; the contract leaves room for later ones. */
+  readonly run = input<string>();
 
   protected readonly shown = computed<StateWord>(() => {
     const parcel = this.parcel();
