@@ -1,7 +1,7 @@
 import { HttpClient } from '@angular/common/http';
 import { inject, Injectable } from '@angular/core';
 import type { Observable } from 'rxjs';
-import type { DaysAnswer, Person, RouteCheck } from '@shared/contract';
+import type { DaysAnswer, RouteCheck } from '@shared/contract';
 
 /** The question without a parcel. */
 @Injectable({ providedIn: 'root' })
@@ -10,9 +10,5 @@ export class RouteCheckApi {
 
   ask(question: RouteCheck): Observable<DaysAnswer> {
     return this.http.post<DaysAnswer>('/api/route-checks', question);
-  }
-
-  me(): Observable<Person> {
-    return this.http.get<Person>('/api/me');
   }
 }

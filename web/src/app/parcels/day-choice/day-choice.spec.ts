@@ -34,6 +34,8 @@ const answer: DaysAnswer = {
     [parcel]="parcel()"
     [answer]="answer"
     [steps]="steps()"
+    [wanted]="wanted()"
+    today="2026-12-06"
     (book)="booked.push($event)"
     (pack)="packed = packed + 1"
   />`,
@@ -43,6 +45,7 @@ class Page {
   readonly answer = answer;
   readonly parcel = signal<Parcel>(draft);
   readonly steps = signal(parcelSteps(draft, { id: draft.breeder.id, roles: ['breeder'] }));
+  readonly wanted = signal<string | undefined>(undefined);
   readonly booked: DayBooking[] = [];
   packed = 0;
 }
@@ -112,5 +115,11 @@ describe('choosing a day', () => {
     await find();
     expect(text()).toContain('The day is chosen by the breeder or a coordinator.');
     expect((fixture.nativeElement as HTMLElement).querySelector('.db-go')).toBeNull();
+  });
+
+  it('begins with the day that a route check had looked at', async () => {
+    page.wanted.set('2026-12-07');
+    const { strip } = await find();
+    expect(await strip.chosen()).toBe('Monday, December 7: tight');
   });
 });

@@ -62,6 +62,10 @@ export class DayChoice {
   readonly parcel = input.required<Parcel>();
   readonly answer = input.required<DaysAnswer>();
   readonly steps = input.required<ParcelSteps>();
+  /** The date at the drop-off counter. */
+  readonly today = input.required<string>();
+  /** The day to begin with, when it is in view. */
+  readonly wanted = input<string>();
   readonly unit = input<TemperatureUnit>('F');
   readonly busy = input(false);
   readonly message = input<string | null>(null);
@@ -85,8 +89,11 @@ export class DayChoice {
     {
       source: () => {
         const { days } = this.answer();
-        const booked = days.find((day) => day.date === this.parcel().shipDate)?.date;
-        return { dates: days.map((day) => day.date), first: booked ?? bestDay(days) };
+        const inView = (date: string | null | undefined) => days.find((day) => day.date === date)?.date;
+        return {
+          dates: days.map((day) => day.date),
+          first: inView(this.parcel().shipDate) ?? inView(this.wanted()) ?? bestDay(days),
+        };
       },
       computation: ({ dates, first }, before) =>
         before?.value && dates.includes(before.value) ? before.value : first,
@@ -97,7 +104,7 @@ export class DayChoice {
   );
   protected readonly offer = computed(() => {
     const day = this.day();
-    return day ? dayOffer(this.parcel(), day) : null;
+    return day ? dayOffer(this.parcel(), day, this.today()) : null;
   });
 
   protected look(date: string): void {

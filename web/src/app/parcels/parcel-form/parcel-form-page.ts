@@ -108,6 +108,11 @@ export class ParcelFormPage implements HasUnsavedChanges {
     const parcel = this.parcel();
     return parcel !== null && isNoteOnly(parcel);
   });
+  protected readonly heading = computed(() => {
+    const parcel = this.parcel();
+    if (!parcel) return this.id() === undefined ? 'New parcel' : 'Change a parcel';
+    return this.noteOnly() ? `Note on ${parcel.code}` : `Change ${parcel.code}`;
+  });
   protected readonly backLink = computed(() =>
     this.id() === undefined ? '/parcels' : `/parcels/${this.id()}`,
   );
@@ -164,7 +169,8 @@ export class ParcelFormPage implements HasUnsavedChanges {
     const saved = await this.saving.run<Parcel>(call, (problem) => this.explain(problem));
     if (!saved) return;
     this.isSaved = true;
-    await this.router.navigate(['/parcels', saved.id], { replaceUrl: before === null });
+    const queryParams = before === null ? { day: this.query.get('day') } : {};
+    await this.router.navigate(['/parcels', saved.id], { queryParams, replaceUrl: before === null });
   }
 
   /** Takes what somebody else saved meanwhile; what was typed here is let go, as the button says. */

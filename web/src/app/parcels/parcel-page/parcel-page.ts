@@ -3,6 +3,7 @@ import {
   ChangeDetectionStrategy,
   Component,
   computed,
+  effect,
   inject,
   input,
   linkedSignal,
@@ -81,6 +82,8 @@ export class ParcelPage {
   protected readonly unit = inject(UnitPreference).unit;
 
   readonly id = input.required<string>();
+  /** A day to begin with, from the address: the one that was looked at in a route check. */
+  readonly day = input<string>();
 
   protected readonly loading = rxResource({
     params: () => Number(this.id()),
@@ -125,9 +128,12 @@ export class ParcelPage {
     const parcel = this.parcel();
     return parcel ? parcelTitle(parcel) : 'Parcel';
   });
+  protected readonly today = computed(() =>
+    dateIn(this.parcel()?.dropOff.zone ?? this.session.circleZone(), new Date()),
+  );
   protected readonly need = computed(() => {
     const parcel = this.parcel();
-    return parcel ? needOf(parcel, dateIn(parcel.dropOff.zone, new Date())).text : null;
+    return parcel ? needOf(parcel, this.today()).text : null;
   });
   protected readonly report = computed(() => {
     const parcel = this.parcel();
@@ -147,6 +153,13 @@ export class ParcelPage {
   protected readonly isBusy = computed(() => this.booking.busy() || this.changing.busy());
   protected readonly isStale = signal(false);
 
+  constructor() {
+    effect(() => {
+      const parcel = this.parcel();
+      if (parcel) this.titles.set(parcelTitle(parcel));
+    });
+  }
+
   protected async bookDay(parcel: Parcel, booking: DayBooking): Promise<void> {
     await this.make(this.booking, this.api.book(parcel, booking));
   }
@@ -165,7 +178,7 @@ export class ParcelPage {
   }
 
   protected async leaveOpen(parcel: Parcel): Promise<void> {
-    const data: SpanQuestion = { parcel, today: dateIn(parcel.dropOff.zone, new Date()) };
+    const data: SpanQuestion = { parcel, today: this.today() };
     const opened = this.dialog.open<SpanDialog, SpanQuestion, Parcel>(SpanDialog, { data, width: '480px' });
     const saved = await firstValueFrom(opened.afterClosed());
     if (saved) this.show(saved);
@@ -207,7 +220,6 @@ export class ParcelPage {
     this.refused.set(null);
     this.isStale.set(false);
     this.loading.set(parcel);
-    this.titles.set(parcelTitle(parcel));
   }
 
   private explain(problem: Problem): string {

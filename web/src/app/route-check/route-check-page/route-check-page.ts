@@ -26,6 +26,7 @@ import { dayLabel } from '../../core/dates';
 import { FieldMessagePipe } from '../../core/http/field-message-pipe';
 import { applyProblem, toProblem } from '../../core/http/problem';
 import { answersFromQuery, answersToQuery } from '../../core/route-answers';
+import { SessionStore } from '../../core/session/session-store';
 import { UnitPreference } from '../../core/unit-preference';
 import { CircleLists } from '../../ui/circle-lists';
 import { ContentsRows } from '../../ui/contents-rows/contents-rows';
@@ -84,6 +85,8 @@ export class RouteCheckPage {
   protected readonly lists = inject(CircleLists);
   protected readonly unit = inject(UnitPreference).unit;
 
+  /** A breeder's parcels are dropped off at their own counter unless they say otherwise. */
+  protected readonly hasOwnCounter = inject(SessionStore).has('breeder');
   private readonly query = this.route.snapshot.queryParamMap;
   protected readonly form = checkForm(answersFromQuery((key) => this.query.get(key)));
   protected readonly service = toSignal(
@@ -163,8 +166,10 @@ export class RouteCheckPage {
   }
 
   private fillDefaults(): void {
-    const { boxId } = this.form.controls;
+    const { boxId, dropOffCounterId } = this.form.controls;
     if (boxId.value === null) boxId.setValue(this.lists.boxes()[0]?.id ?? null);
+    if (!this.hasOwnCounter && dropOffCounterId.value === null)
+      dropOffCounterId.setValue(this.lists.dropOffCounters()[0]?.id ?? null);
   }
 
   private contentsWords(question: RouteCheck): string {

@@ -123,6 +123,8 @@ export class DayStrip {
       why,
       lines: wrapWords(why, characters),
       room: roomText(day),
+      /** On a phone both stand in one line. */
+      beside: [why, day.run ? `run, ${roomText(day)}` : ''].filter(Boolean).join('; '),
       outdoor: day.outdoor && day.verdict !== 'far' ? rangeText(day.outdoor, this.unit()) : '–',
       inBox: day.inBox ? rangeText(day.inBox, this.unit()) : '–',
     };
