@@ -279,6 +279,9 @@ describe('PATCH /runs/:id', () => {
     expect(answer.body).toMatchObject({
       problems: ['Cora Coordinator does not drive on Wednesday, December 2.'],
     });
+    // A breeder is not told of what the coordinators have to put right.
+    const { body } = await (await site.who(otherBreeder)).get(`/api/runs/${run.id}`).expect(200);
+    expect(body).toMatchObject({ problems: [] });
     const third = await site.booked(breeder, wednesday);
     expect((await patch(answer.body as Run, { addParcelIds: [third.id] })).status).toBe(409);
   });

@@ -100,6 +100,13 @@ describe('confirmation', () => {
     expect((await site.run(proposed.id)).state).toBe('proposed');
   });
 
+  it('refuses a run whose day is over', async () => {
+    site.setNow('2026-12-03T14:00:00.000Z');
+    const answer = await step(proposed, 'confirmation');
+    expect(answer.status).toBe(409);
+    expect((answer.body as { detail: string }).detail).toContain('Wednesday, December 2 is over.');
+  });
+
   it('refuses a second run of the same driver on a day', async () => {
     const more = await site.booked(breeder, wednesday);
     // Two proposals for a day cannot come about by the API; a restored backup might hold them.
@@ -178,6 +185,16 @@ describe('the drive', () => {
     expect((await newMails(before)).map(({ to }) => to)).toEqual(
       expect.arrayContaining([otherBreeder, 'unrelated@example.org']),
     );
+  });
+
+  it('goes on without a parcel that is put on hold on the way', async () => {
+    const underway = await done(await site.confirm(proposed), 'departure');
+    await site.deps.services.parcels.putOnHold(mine.id, 'The buyer has called it off.', null);
+    expect(await site.parcel(mine.id)).toMatchObject({ state: 'on-hold', run: null });
+    const left = await site.run(underway.id);
+    expect(left.parcels.map(({ id }) => id)).toEqual([theirs.id]);
+    expect((await site.parcel(theirs.id)).shareCents).toBe(left.costCents);
+    expect((await done(left, 'hand-over')).state).toBe('handed-over');
   });
 
   it('refuses what is not on the run, field by field', async () => {

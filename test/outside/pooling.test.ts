@@ -15,6 +15,8 @@ import { timeline } from '@shared/pooling/timeline';
 import { arrival, cheapestByHand, found, legsOf } from '../support/by-hand';
 import { poolCase, weekDays, type CaseSize } from '../support/pooling-cases';
 
+jest.setTimeout(60_000);
+
 const options: PlanOptions = { seed: 1, rounds: 40, shouldStop: () => false, milpSeconds: 5 };
 const noSolver: SolveMilp = () => ({ status: 'failed', objective: null, bound: null, values: null });
 

@@ -4,6 +4,8 @@ import { bestPath, sequenceTable, type SequenceProblem } from '@shared/pooling/s
 import { centsOf, cheapestByHand, isKept, orders } from '../support/by-hand';
 import { seeded } from '../support/pooling-cases';
 
+jest.setTimeout(30_000);
+
 interface Burma {
   readonly optimum: number;
   readonly towns: readonly (readonly [number, number])[];

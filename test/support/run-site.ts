@@ -2,6 +2,9 @@ import type { Parcel, ParcelNew, Proposal, Run } from '@shared/contract';
 import { createForecastFake, type ForecastFake } from '@api/fakes/forecast/forecast-fake';
 import { createTestSite, type Caller, type TestSite } from './test-site';
 
+// Each of these tests enters parcels, fetches weather and pools: seconds on a busy machine.
+jest.setTimeout(30_000);
+
 /** The days of the tests, seen from Tuesday 1 December 2026, 06:00 in Texas. */
 export const today = '2026-12-01';
 export const wednesday = '2026-12-02';

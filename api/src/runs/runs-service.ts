@@ -177,7 +177,7 @@ async function takeOut(tx: Deps, parcelId: number, why: string, who: Actor | nul
   const [link] = await findRunParcels(tx.db, { parcelIds: [parcelId] });
   if (!link) return;
   const [run] = await readRuns(tx, { ids: [link.run_id] });
-  if (!run || !['proposed', 'confirmed'].includes(run.state)) return;
+  if (!run || !['proposed', 'confirmed', 'underway'].includes(run.state)) return;
   if (run.parcels.length === 1) {
     await callOffRun(tx, who, run.id, null, why);
     return;
@@ -186,7 +186,7 @@ async function takeOut(tx: Deps, parcelId: number, why: string, who: Actor | nul
   await tx.services.parcels.setShare(parcelId, null);
   await workOut(tx, run.id);
   await note(tx, who, run.id, 'changed', why);
-  if (run.state === 'confirmed')
+  if (run.state !== 'proposed')
     await tx.services.notices.tell({
       kind: 'run-changed',
       runId: run.id,
