@@ -135,6 +135,11 @@ export class ParcelPage {
     const parcel = this.parcel();
     return parcel ? needOf(parcel, this.today()).text : null;
   });
+  /** What is said below anyway is not said twice: the reason of a hold, and what is next once it is packed. */
+  protected readonly sub = computed(() => {
+    if (this.parcel()?.state === 'on-hold') return 'Choose a new day.';
+    return this.isPlanned() ? this.need() : null;
+  });
   protected readonly report = computed(() => {
     const parcel = this.parcel();
     return parcel && reportWords(parcel);
