@@ -1,6 +1,13 @@
 import type { NoticeEvent } from '@api/notices/notices-service';
 import { addParcel, addRun } from '../support/run-rows';
-import { createMailSite, invitationTo, onlyMailTo, textOf, type MailSite } from '../support/mail-site';
+import {
+  createMailSite,
+  instantOf,
+  invitationTo,
+  onlyMailTo,
+  textOf,
+  type MailSite,
+} from '../support/mail-site';
 
 /** Bea sells to Bo (Phoenix), Otto to Uma (Denver); Cora drives both parcels on Tuesday 8 December. */
 const bea = 'breeder@example.org';
@@ -217,6 +224,36 @@ describe('Who hears of what', () => {
     expect(hers.filter(({ invitation }) => invitation)).toHaveLength(1);
     expect(hers).toHaveLength(2);
     expect(mails.filter(({ to }) => to.includes(uma))).toEqual([]);
+  });
+
+  it('a parcel that moves to another day leaves its run: one mail moves the buyer’s event to the new date', async () => {
+    const before = invitationTo(await tell({ kind: 'run-confirmed', runId }), bo);
+    await mail.site.deps.transaction(async (tx) => {
+      await tx.services.runs.takeOut(parcelId, 'TD-1 ships on another day now.', null);
+      await tx
+        .db('parcels')
+        .where({ id: parcelId })
+        .update({ ship_date: '2026-12-10' })
+        .increment('version', 1);
+      await tx.services.notices.tell({ kind: 'parcel-booked', parcelId });
+    });
+    const after = invitationTo(await mail.receive(), bo);
+    expect(textOf(after.calendar, 'method')).toBe('REQUEST');
+    expect(after.event.uid).toBe(before.event.uid);
+    expect(after.event.sequence).toBeGreaterThan(before.event.sequence);
+    expect(instantOf(after.event.startDate)).toBe('2026-12-11T16:00:00.000Z');
+  });
+
+  it('once a buyer knows that the arrival is off, a new booking invites with its run again', async () => {
+    await tell({ kind: 'run-confirmed', runId });
+    await tell({ kind: 'run-called-off', runId, parcelIds: [parcelId, ottosId], reason: 'Ice.' });
+    await mail.site
+      .db('parcels')
+      .where({ id: parcelId })
+      .update({ ship_date: '2026-12-10' })
+      .increment('version', 1);
+    const mails = await tell({ kind: 'parcel-booked', parcelId });
+    expect(onlyMailTo(mails, bo).invitation).toBeNull();
   });
 
   it('a former buyer’s event is taken back when the parcel goes to somebody else', async () => {

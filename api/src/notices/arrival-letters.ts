@@ -26,7 +26,7 @@ export async function arrivalInvitation(deps: Deps, parcel: Parcel): Promise<Inv
   return requestEvent(deps, { kind: 'arrival', id: parcel.id }, parcel.buyer, event);
 }
 
-const mayChange = 'The date can still change with the forecast. You hear at once if it does.';
+const mayChange = 'The date can still change with the forecast; if it does, you hear at once.';
 
 /** The day is chosen; when and where to collect follows with the run. */
 export async function bookedLetter(deps: Deps, parcel: Parcel, arrivalDate: string): Promise<LetterParts> {
@@ -71,6 +71,6 @@ function whereAndWhen({ arrival, window }: Planned): string {
   const { place, service } = arrival;
   const span = clockSpan(window.from, window.to, place.zone, place.city);
   return service === 'hold'
-    ? `Collect it at the ${place.name} ${span}.`
-    : `It comes to your door ${span}. Somebody must be there to take it in.`;
+    ? `Ready to collect at the ${place.name} ${span}.`
+    : `The carrier comes to your door ${span}. Somebody must be there to take the box in.`;
 }

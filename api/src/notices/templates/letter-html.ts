@@ -43,9 +43,13 @@ const lines = (text: string): string => inline(text).replaceAll('\n', '<br>');
 const largeOf = ({ large }: LetterParts): string =>
   large.flatMap((line) => (line === undefined ? [] : [inline(line)])).join('<br>');
 
+/** A step that begins with a time of day has it in bold. */
+const timedStep = (step: string): string =>
+  inline(step).replace(/^\d{1,2}:\d\d(?:&nbsp;[AP]M)?/, '<strong>$&</strong>');
+
 function stepsOf({ steps = [] }: LetterParts): string {
   if (steps.length === 0) return '';
-  const items = steps.map((step) => `<li style="margin:0 0 8px;padding-left:4px">${inline(step)}</li>`);
+  const items = steps.map((step) => `<li style="margin:0 0 8px;padding-left:4px">${timedStep(step)}</li>`);
   return `<ol style="margin:0 0 16px;padding-left:22px">${items.join('')}</ol>\n`;
 }
 
@@ -53,7 +57,7 @@ function stepsOf({ steps = [] }: LetterParts): string {
 function factsOf({ facts = [] }: LetterParts): string {
   if (facts.length === 0) return '';
   const row = ([label, value]: readonly [string, string]) =>
-    `<tr><th class="soft rule" scope="row" style="text-align:left;vertical-align:top;font-weight:400;color:#51606b;padding:8px 14px 8px 0;border-top:1px solid #e7dfce;white-space:nowrap">${escapeHtml(label)}</th>` +
+    `<tr><th class="soft rule" scope="row" style="text-align:left;vertical-align:top;width:1%;font-weight:400;color:#51606b;padding:8px 18px 8px 0;border-top:1px solid #e7dfce;white-space:nowrap">${escapeHtml(label)}</th>` +
     `<td class="rule" style="vertical-align:top;padding:8px 0;border-top:1px solid #e7dfce;overflow-wrap:anywhere">${lines(value)}</td></tr>`;
   return `<table style="width:100%;border-collapse:collapse;margin:0 0 18px;font-size:15px">${facts.map(row).join('')}</table>\n`;
 }
