@@ -38,6 +38,13 @@ const session: SessionInfo = {
   circleZone: 'America/Chicago',
 };
 
+const noForecast = {
+  type: 'x',
+  title: 'The forecast service does not answer',
+  status: 503,
+  code: 'forecast-unavailable',
+  errors: [],
+};
 const fail = (message: string): never => {
   throw new Error(message);
 };
@@ -80,10 +87,12 @@ describe('a parcel', () => {
   });
 
   /** Lets the page ask for what follows and answers it. */
-  async function settle(): Promise<void> {
+  async function settle(daysStatus = 200): Promise<void> {
     await new Promise((done) => setTimeout(done));
     TestBed.tick();
-    for (const call of http.match('/api/parcels/14/days')) call.flush(answer);
+    for (const call of http.match('/api/parcels/14/days'))
+      if (daysStatus === 200) call.flush(answer);
+      else call.flush(noForecast, { status: daysStatus, statusText: 'No' });
     for (const call of http.match('/api/parcels/14/history')) call.flush([]);
     await fixture.whenStable();
   }
@@ -137,5 +146,19 @@ describe('a parcel', () => {
     await settle();
     expect(text()).not.toContain('meanwhile');
     expect(text()).toContain('ships Wed, Dec 9');
+  });
+
+  it('can be packed also while no forecast can be read', async () => {
+    fixture.componentRef.setInput('id', '15');
+    TestBed.tick();
+    http.expectOne('/api/parcels/15').flush(sampleParcel());
+    await settle(503);
+    expect(text()).toContain('The forecast service does not answer');
+    press(button('Mark as packed'));
+    const call = http.expectOne({ method: 'PATCH', url: '/api/parcels/14' });
+    expect(call.request.body).toEqual({ state: 'packed' });
+    call.flush(sampleParcel({ state: 'packed', version: 4 }));
+    await settle();
+    expect(text()).toContain('Packed.');
   });
 });

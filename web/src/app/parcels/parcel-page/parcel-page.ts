@@ -152,6 +152,11 @@ export class ParcelPage {
     const parcel = this.parcel();
     return parcel && parcelSteps(parcel, { id: this.session.me()?.id ?? 0, roles: this.session.roles() });
   });
+  /** What can be done without the strip: it is not needed any more, or its days could not be read just now. */
+  protected readonly hasQuickStep = computed(() => {
+    const can = this.steps();
+    return Boolean(can && (can.canPack || can.canTakeOffDay || can.canUnpack || can.canClose));
+  });
   /** Choosing a day and everything else: each says its trouble where it was asked for. */
   protected readonly booking = new CallState();
   protected readonly changing = new CallState();
