@@ -143,6 +143,15 @@ describe('Calendars by link', () => {
     await (await site.as(null)).get(path).expect(404);
   });
 
+  it('is described as text/calendar in the OpenAPI document', async () => {
+    const { body } = await (await site.as(null)).get('/api/openapi.json').expect(200);
+    const { paths } = body as {
+      paths: Record<string, { get: { responses: Record<string, { content: object }> } }>;
+    };
+    for (const path of ['/api/calendars/{token}.ics', '/api/arrivals/{token}/calendar.ics'])
+      expect(Object.keys(paths[path]?.get.responses['200']?.content ?? {})).toEqual(['text/calendar']);
+  });
+
   it('answers 404 for an arrival that does not exist', async () => {
     await (await site.as(null)).get('/api/arrivals/no-such-arrival-token/calendar.ics').expect(404);
   });

@@ -1,4 +1,5 @@
 import type { Desk } from '@shared/contract';
+import { addParcel } from '../support/run-rows';
 import { createTestSite, type TestSite } from '../support/test-site';
 
 /** Tuesday 1 December 2026 in Texas; the small circle's counters work Monday to Friday. */
@@ -211,23 +212,55 @@ describe('GET /api/health', () => {
     });
   });
 
-  it('tells the age of the oldest and the newest answer of the forecast service', async () => {
-    const at = (minutes: number) => new Date(site.deps.clock.nowMs() - minutes * 60_000).toISOString();
-    await site.db('forecasts').insert([
-      { place_key: 'a', lat: 1, lon: 1, zone: 'UTC', fetched_at: at(5) },
-      { place_key: 'b', lat: 2, lon: 2, zone: 'UTC', fetched_at: at(95) },
-      { place_key: 'c', lat: 3, lon: 3, zone: 'UTC' },
-    ]);
+  /** A booked parcel from San Antonio over Indianapolis to Phoenix: three places whose weather decides about it. */
+  const book = () =>
+    addParcel(site, {
+      code: 'TD-1',
+      breederId: site.ids.breeder,
+      buyerId: site.ids.buyer,
+      holdCounterId: site.ids.phoenixCounter,
+      shipDate: '2026-12-08',
+    });
+  const fetched = (key: string, minutesAgo: number) => {
+    const at = new Date(site.deps.clock.nowMs() - minutesAgo * 60_000).toISOString();
+    return site.db('forecasts').insert({ place_key: key, lat: 1, lon: 1, zone: 'UTC', fetched_at: at });
+  };
+  const [sanAntonio, phoenix, denver] = ['29.53,-98.47', '33.43,-112.01', '39.85,-104.67'] as const;
+
+  it('tells the age of the oldest and the newest forecast that a parcel waits on, and of no others', async () => {
+    await book();
+    await fetched(sanAntonio, 5);
+    await fetched(phoenix, 95);
+    await fetched(denver, 9000);
     expect(await health()).toMatchObject({
       status: 'ok',
       forecasts: { places: 3, oldestMinutes: 95, newestMinutes: 5 },
     });
   });
 
-  it('is degraded when the service has been silent for longer than a forecast may be old', async () => {
-    const at = new Date(site.deps.clock.nowMs() - 13 * 3_600_000).toISOString();
-    await site.db('forecasts').insert({ place_key: 'a', lat: 1, lon: 1, zone: 'UTC', fetched_at: at });
+  it.each([
+    ['has been silent for longer than a forecast may be old', 13 * 60],
+    ['has never answered', null],
+  ])('is degraded when the service %s', async (_, minutesAgo) => {
+    await book();
+    if (minutesAgo !== null) await fetched(phoenix, minutesAgo);
     expect(await health()).toMatchObject({ status: 'degraded' });
+  });
+
+  it('is degraded while a mail has failed', async () => {
+    await site.db('outbox').insert({
+      idempotency_key: 'k',
+      to_email: 'bo@example.org',
+      to_name: 'Bo',
+      subject: 's',
+      text: 't',
+      html: 'h',
+      state: 'failed',
+      next_attempt_at: '2026-12-01T10:00:00.000Z',
+      message_id: '<m@example.org>',
+      created_at: '2026-12-01T10:00:00.000Z',
+    });
+    expect(await health()).toMatchObject({ status: 'degraded', mailQueue: { waiting: 0, failed: 1 } });
   });
 
   it('is degraded when the database does not answer', async () => {

@@ -26,14 +26,12 @@ export async function placesInUse(db: Knex): Promise<PlaceInUse[]> {
     .join('carriers', 'carriers.id', 'c.carrier_id')
     .join('hubs', 'hubs.id', 'carriers.hub_id')
     .distinct('hubs.lat', 'hubs.lon', 'hubs.city', 'hubs.state') as Promise<Named[]>;
-  const doors = parcels()
-    .where('p.service', 'door')
-    .distinct({
-      lat: 'p.door_lat',
-      lon: 'p.door_lon',
-      city: 'p.door_city',
-      state: 'p.door_state',
-    }) as Promise<Named[]>;
+  const doors = parcels().where('p.service', 'door').distinct({
+    lat: 'p.door_lat',
+    lon: 'p.door_lon',
+    city: 'p.door_city',
+    state: 'p.door_state',
+  }) as Promise<Named[]>;
   const rows = [
     ...(await ends('p.drop_off_counter_id')),
     ...(await hubs),

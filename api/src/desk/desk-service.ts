@@ -8,7 +8,10 @@ import { parcelsNeedingAttention, runsNeedingAttention } from './attention';
 import { databaseAnswers, deskCounts, placesInUse } from './desk-queries';
 
 export interface DeskService {
-  /** For anybody: the database, the mail queue and the age of the forecasts, without names. Never throws. */
+  /**
+   * For anybody: the database, the mail queue and the age of the forecasts that parcels wait on, without names. Never
+   * throws.
+   */
   health(): Promise<Health>;
   /** What needs an admin's attention at present. */
   desk(actor: Actor): Promise<Desk>;
@@ -27,22 +30,21 @@ export function createDeskService(deps: Deps): DeskService {
 
 async function health({ db, services, clock }: Deps): Promise<Health> {
   if (!(await databaseAnswers(db))) return failing;
-  const [mailQueue, statuses, { policy }] = [
-    await services.notices.queue(),
-    await services.forecasts.status(),
-    await services.policy.current(),
-  ];
+  const mailQueue = await services.notices.queue();
+  const { policy } = await services.policy.current();
+  const inUse = new Set((await placesInUse(db)).map(({ key }) => key));
+  const statuses = (await services.forecasts.status()).filter(({ placeKey }) => inUse.has(placeKey));
   const ages = statuses.flatMap(({ fetchedAt }) =>
     fetchedAt === null ? [] : [Math.max(0, Math.round((clock.nowMs() - Date.parse(fetchedAt)) / 60_000))],
   );
   const newest = ages.length > 0 ? Math.min(...ages) : null;
-  const silent = statuses.length > 0 && (newest === null || newest > policy.forecastMaxAgeHours * 60);
+  const silent = inUse.size > 0 && (newest === null || newest > policy.forecastMaxAgeHours * 60);
   return {
     status: silent || mailQueue.failed > 0 ? 'degraded' : 'ok',
     database: 'ok',
     mailQueue,
     forecasts: {
-      places: statuses.length,
+      places: inUse.size,
       oldestMinutes: ages.length > 0 ? Math.max(...ages) : null,
       newestMinutes: newest,
     },
