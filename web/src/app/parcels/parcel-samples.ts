@@ -50,7 +50,6 @@ export const sampleParcel = (change: Partial<Parcel> = {}): Parcel => ({
   mornings: [],
   note: '',
   report: null,
-  report: null,
   bookedVerdict: null,
   createdAt: '2026-12-01T12:00:00.000Z',
   updatedAt: '2026-12-01T12:00:00.000Z',
