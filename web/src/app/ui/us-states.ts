@@ -55,5 +55,3 @@ export const usStates: readonly (readonly [code: string, name: string])[] = [
 
 /** `Arizona` of `AZ`; the code itself when it is none of these. */
 export const stateName = (code: string): string => usStates.find(([known]) => known === code)?.[1] ?? code;
-
-export { usZones } from './us-zones';

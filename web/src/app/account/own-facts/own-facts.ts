@@ -17,7 +17,7 @@ import { MatOption, MatSelect } from '@angular/material/select';
 import type { Person, TemperatureUnit } from '@shared/contract';
 import { FieldMessagePipe } from '../../core/http/field-message-pipe';
 import { SaveState } from '../../ui/save-state';
-import { usZones } from '../../ui/us-states';
+import { zoneChoices } from '../../ui/us-zones';
 import { AccountApi } from '../account-api';
 import { SaveFoot } from '../save-foot/save-foot';
 
@@ -54,10 +54,7 @@ export class OwnFacts {
   protected readonly saving = new SaveState();
   protected readonly isDone = signal(false);
   /** The usual zones, and one's own where it is another. */
-  protected readonly zones = computed(() => {
-    const own = this.person().zone;
-    return usZones.some(([zone]) => zone === own) ? usZones : [...usZones, [own, own] as const];
-  });
+  protected readonly zones = computed(() => zoneChoices(this.person().zone));
 
   constructor() {
     effect(() => {
