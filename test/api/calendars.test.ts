@@ -95,7 +95,8 @@ describe('Calendars by link', () => {
     await confirmRun();
     const off = { kind: 'run-called-off', runId: 1, parcelIds: [parcelId], reason: 'Ice.' } as const;
     await site.deps.services.notices.tell(off);
-    expect((await read(await feedOf('breeder@example.org'))).events).toEqual([]);
+    for (const who of ['breeder', 'coordinator', 'buyer'])
+      expect((await read(await feedOf(`${who}@example.org`))).events).toEqual([]);
   });
 
   it('gets a new address at a word, and the old one opens nothing any more', async () => {

@@ -136,12 +136,30 @@ describe('The form of a calendar part, whatever people typed', () => {
     const text = publishedCalendar([], {
       name: 'Hill Country circle',
       zone: 'Pacific/Honolulu',
-      lookAgainSeconds: 3600,
+      lookAgainMinutes: 60,
     });
     const calendar = new ICAL.Component(ICAL.parse(text));
     expect(calendar.getAllSubcomponents().map((one) => one.name)).toEqual(['vtimezone']);
     expect(calendar.getFirstPropertyValue('x-wr-calname')).toBe('Hill Country circle');
-    expect(String(calendar.getFirstPropertyValue('refresh-interval'))).toBe('PT1H'); // RFC 7986 5.7
+    expect(String(calendar.getFirstPropertyValue('refresh-interval'))).toBe('PT60M'); // RFC 7986 5.7
+  });
+
+  it('puts every property of the calendar before its components (RFC 5545 3.6: icalbody = calprops component)', () => {
+    const options = { name: 'Hill Country circle', zone: 'America/Phoenix', lookAgainMinutes: 60 };
+    const published = publishedCalendar([{ ...entry(), attendee: null }], options);
+    for (const text of [published, publishedCalendar([], options), calendarText('REQUEST', entry())]) {
+      const lines = text.split('\r\n').filter((line) => line !== '' && !line.startsWith(' '));
+      const depths: [number, string][] = [];
+      let depth = 0;
+      for (const line of lines) {
+        if (line.startsWith('END:')) depth -= 1;
+        depths.push([depth, line]);
+        if (line.startsWith('BEGIN:')) depth += 1;
+      }
+      const outer = depths.filter(([at]) => at === 1).map(([, line]) => line);
+      const firstComponent = outer.findIndex((line) => line.startsWith('BEGIN:'));
+      expect(outer.slice(firstComponent).filter((line) => !/^(BEGIN|END):/.test(line))).toEqual([]);
+    }
   });
 });
 

@@ -22,8 +22,8 @@ export interface CalendarsService {
 
 /** What is longer past is left out, so that a feed does not grow for ever. Assumption. */
 const pastDays = 60;
-/** How often a calendar should look again (RFC 7986 5.7), in seconds. */
-const lookAgainSeconds = 3600;
+/** How often a calendar should look again (RFC 7986 5.7). */
+const lookAgainMinutes = 60;
 
 /** Calendars by secret address. An event has the same UID here and in its invitation, so that nobody sees it twice. */
 export function createCalendarsService(deps: Deps): CalendarsService {
@@ -49,30 +49,35 @@ async function feedText(deps: Deps, token: string): Promise<string> {
   const { db, services, clock } = deps;
   const owner = await findFeedOwner(db, token);
   if (!owner) throw notFound('That calendar');
-  const standing = await services.notices.standing(owner.id);
-  const invited = new Set(
-    standing.flatMap(({ subject }) => (subject.kind === 'arrival' ? [subject.id] : [])),
+  const invitations = await services.notices.invitationsOf(owner.id);
+  // What was taken back stays away until it is said again: the mail about it has said so.
+  const told = new Set(
+    invitations.flatMap(({ subject }) => (subject.kind === 'arrival' ? [subject.id] : [])),
   );
-  const entries = standing.map((invitation) => invitedEntry(deps, invitation));
+  const entries = invitations
+    .filter(({ method }) => method === 'REQUEST')
+    .map((invitation) => invitedEntry(deps, invitation));
   for (const parcel of await services.parcels.ofBuyer(owner.id)) {
-    if (invited.has(parcel.id)) continue;
-    const entry = await plannedEntry(deps, parcel);
+    const entry = told.has(parcel.id) ? null : await plannedEntry(deps, parcel, 0);
     if (entry) entries.push(entry);
   }
   const since = new Date(clock.nowMs() - pastDays * 86_400_000).toISOString();
   const { policy } = await services.policy.current();
   return publishedCalendar(
     entries.filter((entry) => entry.event.end >= since),
-    { name: policy.circleName, lookAgainSeconds, zone: owner.zone },
+    { name: policy.circleName, lookAgainMinutes, zone: owner.zone },
   );
 }
 
 async function arrivalText(deps: Deps, token: string): Promise<string> {
   const parcel = await deps.services.parcels.byToken(token);
-  const standing = (await deps.services.notices.standing(parcel.buyer.id)).find(
+  const last = (await deps.services.notices.invitationsOf(parcel.buyer.id)).find(
     ({ subject }) => subject.kind === 'arrival' && subject.id === parcel.id,
   );
-  const entry = standing ? invitedEntry(deps, standing) : await plannedEntry(deps, parcel);
+  const entry =
+    last?.method === 'REQUEST'
+      ? invitedEntry(deps, last)
+      : await plannedEntry(deps, parcel, last?.sequence ?? 0);
   if (!entry) throw notFound('A planned arrival');
   return publishedCalendar([entry], { zone: entry.event.zone });
 }
@@ -86,8 +91,8 @@ const invitedEntry = ({ config }: Deps, invitation: Invitation): CalendarEntry =
   attendee: null,
 });
 
-/** An arrival that stands but that no invitation has told of yet; null while no day stands. */
-async function plannedEntry(deps: Deps, parcel: Parcel): Promise<CalendarEntry | null> {
+/** An arrival whose day stands but that no invitation tells of at present; null while no day stands. */
+async function plannedEntry(deps: Deps, parcel: Parcel, sequence: number): Promise<CalendarEntry | null> {
   const { config, services } = deps;
   if (parcel.arrivalDate === null) return null;
   const arrival = await services.arrivals.byToken(parcel.arrivalUrl.split('/').at(-1) ?? '');
@@ -95,7 +100,7 @@ async function plannedEntry(deps: Deps, parcel: Parcel): Promise<CalendarEntry |
   if (!window || arrival.status === 'cancelled' || arrival.status === 'on-hold') return null;
   return {
     uid: calendarUid(config, { kind: 'arrival', id: parcel.id }, parcel.buyer.id),
-    sequence: 0,
+    sequence,
     stamp: parcel.updatedAt,
     event: arrivalEvent(arrival, window, parcel.arrivalUrl),
     organizer: sender(config),

@@ -54,7 +54,7 @@ export function calendarText(method: 'REQUEST' | 'CANCEL', entry: CalendarEntry)
 export interface PublishOptions {
   readonly name?: string;
   /** How long a calendar may wait before it looks again (RFC 7986 5.7). */
-  readonly lookAgainSeconds?: number;
+  readonly lookAgainMinutes?: number;
   /** The zone that a calendar without events names: RFC 5545 3.6 asks for one component at least. */
   readonly zone: string;
 }
@@ -63,12 +63,22 @@ export interface PublishOptions {
 export function publishedCalendar(entries: readonly CalendarEntry[], options: PublishOptions): string {
   const calendar = emptyCalendar('PUBLISH');
   if (options.name !== undefined) calendar.name(oneLine(options.name));
-  if (options.lookAgainSeconds !== undefined) calendar.ttl(options.lookAgainSeconds);
   for (const entry of entries) addEvent(calendar, entry, false);
-  const text = `${calendar.toString()}\r\n`;
+  const text = withLookAgain(`${calendar.toString()}\r\n`, options.lookAgainMinutes);
   if (entries.length > 0) return text;
   const zone = timeZoneBlock(options.zone) ?? timeZoneBlock('America/Chicago') ?? '';
   return text.replace('END:VCALENDAR', () => `${zone.trimEnd()}\r\nEND:VCALENDAR`);
+}
+
+/** The generator would write these after the components, where RFC 5545 3.6 allows no property any more. */
+function withLookAgain(text: string, minutes: number | undefined): string {
+  if (minutes === undefined) return text;
+  const method = '\r\nMETHOD:PUBLISH\r\n';
+  const span = `PT${minutes}M`;
+  return text.replace(
+    method,
+    `${method}REFRESH-INTERVAL;VALUE=DURATION:${span}\r\nX-PUBLISHED-TTL:${span}\r\n`,
+  );
 }
 
 function emptyCalendar(method: keyof typeof ICalCalendarMethod): ICalCalendar {

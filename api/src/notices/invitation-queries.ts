@@ -80,10 +80,8 @@ export async function invitedPeople(db: Knex, subject: Subject): Promise<number[
   return rows.map((row) => row.person_id);
 }
 
-/** What stands in a person's calendar at present, in the order it was first said. */
-export async function standingInvitations(db: Knex, personId: number): Promise<Invitation[]> {
-  const rows = await db<InvitationRow>('invitations')
-    .where({ person_id: personId, method: 'REQUEST' })
-    .orderBy('id');
+/** Everything a person was ever invited to, as it was last said, in the order it was first said. */
+export async function invitationsOf(db: Knex, personId: number): Promise<Invitation[]> {
+  const rows = await db<InvitationRow>('invitations').where({ person_id: personId }).orderBy('id');
   return rows.map(toInvitation);
 }

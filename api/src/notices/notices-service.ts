@@ -1,7 +1,7 @@
 import { notFound } from '@shared/errors';
 import type { Deps } from '../deps';
 import { mailWaits } from './mail-wake';
-import { standingInvitations, type Invitation } from './invitation-queries';
+import { invitationsOf, type Invitation } from './invitation-queries';
 import { countMails, failedMails, requeueMail } from './outbox-queries';
 import { drainOutbox } from './outbox';
 import {
@@ -46,8 +46,8 @@ export interface NoticesService {
   drain(): Promise<{ sent: number; failed: number }>;
   queue(): Promise<{ waiting: number; failed: number }>;
   failedMail(): Promise<{ id: number; to: string; subject: string; error: string; at: string }[]>;
-  /** What stands in a person's calendar at present. */
-  standing(personId: number): Promise<Invitation[]>;
+  /** Everything a person was ever invited to, as it was last said: REQUEST stands, CANCEL was taken back. */
+  invitationsOf(personId: number): Promise<Invitation[]>;
   /** Puts a failed mail back into the queue. Throws 404. */
   resend(id: number): Promise<void>;
 }
@@ -90,7 +90,7 @@ export function createNoticesService(deps: Deps): NoticesService {
     drain: () => drainOutbox(deps),
     queue: () => countMails(db),
     failedMail: () => failedMails(db, 100),
-    standing: (personId) => standingInvitations(db, personId),
+    invitationsOf: (personId) => invitationsOf(db, personId),
     async resend(id) {
       if (!(await requeueMail(db, id, clock.nowIso()))) throw notFound('That failed mail');
       deps.afterCommit(() => mailWaits(deps.config));
