@@ -1,5 +1,7 @@
-import type { Parcel, Person, Run } from '@shared/contract';
+import type { Counter, Parcel, Person, Run } from '@shared/contract';
 import { notFound } from '@shared/errors';
+import type { Policy } from '@shared/policy/policy';
+import { aloneTrip } from '@shared/pooling/cost';
 import type { Deps } from '../deps';
 import { has, type Actor } from '../http/actor';
 import {
@@ -51,7 +53,10 @@ export async function readRuns(deps: Deps, filter: RunFilter): Promise<Run[]> {
       loadL: Math.round(own.reduce((sum, { parcel }) => sum + parcel.box.volumeL, 0) * 10) / 10,
       stops: stops
         .filter((stop) => stop.run_id === row.id)
-        .map((stop) => stopView(stop, need(people.get(stop.breeder_id)), own)),
+        .map((stop) => {
+          const breeder = need(people.get(stop.breeder_id));
+          return { ...stopView(stop, breeder, own), aloneCents: aloneCents(breeder, counter, policy) };
+        }),
       parcels: own.map(({ link, parcel }) => ({
         id: parcel.id,
         code: parcel.code,
@@ -105,13 +110,23 @@ const figures = (row: RunRow) => ({
   version: row.version,
 });
 
-const stopView = (stop: StopRow, breeder: Person, own: readonly Linked[]): Run['stops'][number] => ({
+function aloneCents(breeder: Person, counter: Counter, { pooling }: Policy): number {
+  if (breeder.lat === null || breeder.lon === null) return 0;
+  return aloneTrip({ lat: breeder.lat, lon: breeder.lon }, counter, pooling, pooling.aloneCentsPerMile).cents;
+}
+
+const stopView = (
+  stop: StopRow,
+  breeder: Person,
+  own: readonly Linked[],
+): Omit<Run['stops'][number], 'aloneCents'> => ({
   seq: stop.seq,
   breederId: breeder.id,
   breederName: breeder.name,
   businessName: breeder.businessName,
   street: breeder.street,
   city: breeder.city,
+  phone: breeder.phone,
   lat: breeder.lat ?? 0,
   lon: breeder.lon ?? 0,
   arriveAt: stop.arrive_at,

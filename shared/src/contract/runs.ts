@@ -36,6 +36,7 @@ export const runStop = z.object({
   businessName: z.string().nullable(),
   street: z.string().nullable(),
   city: z.string().nullable(),
+  phone: z.string().nullable(),
   lat: z.number(),
   lon: z.number(),
   arriveAt: instant,
@@ -43,6 +44,8 @@ export const runStop = z.object({
   waitMinutes: z.number(),
   driveMinutes: z.number(),
   miles: z.number(),
+  /** What this breeder would pay to drive to the counter and back alone, at the circle's present rates. */
+  aloneCents: z.number().int(),
   parcelIds: z.array(id),
 });
 export type RunStop = z.infer<typeof runStop>;

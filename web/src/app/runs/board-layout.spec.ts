@@ -53,7 +53,7 @@ describe('the run board', () => {
 
   it('gives days with runs the wider columns', () => {
     const week = boardWeeks([sampleRun()], [], today, weeks(1))[0];
-    expect(week && boardColumns(week).split(') ')[0]).toBe('minmax(200px, 2fr');
+    expect(week && boardColumns(week).split(') ')[0]).toBe('minmax(164px, 2fr');
   });
 
   it('names the run that waits for a word', () => {

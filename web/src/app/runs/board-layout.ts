@@ -87,9 +87,7 @@ function isShown(day: BoardDay): boolean {
 
 /** Days with runs get the room; an empty one is a narrow column. For `grid-template-columns`. */
 export function boardColumns(week: BoardWeek): string {
-  return week.days
-    .map((day) => (day.runs.length > 0 ? 'minmax(200px, 2fr)' : 'minmax(104px, 1fr)'))
-    .join(' ');
+  return week.days.map((day) => (day.runs.length > 0 ? 'minmax(164px, 2fr)' : 'minmax(96px, 1fr)')).join(' ');
 }
 
 /** `1 parcel`, `3 parcels`. */

@@ -1,4 +1,4 @@
-import { couldJoin, runActions, sharesOf, toldOnConfirmation } from './run-actions';
+import { couldJoin, runActions, runsFor, sharesOf, toldOnConfirmation } from './run-actions';
 import { sampleParcel, sampleRun } from './run-samples';
 
 describe('what can be done with a run', () => {
@@ -48,7 +48,30 @@ describe('joining a run', () => {
   });
 });
 
+describe('the runs that could take a parcel', () => {
+  it('are still to be driven, on an open day, and not the one it is on', () => {
+    const parcel = sampleParcel({
+      flexible: { from: '2026-12-07', to: '2026-12-09' },
+      run: { id: 3, state: 'proposed', date: '2026-12-08', coordinatorName: 'Delia' },
+    });
+    const runs = [
+      sampleRun({ id: 1, date: '2026-12-08' }),
+      sampleRun({ id: 2, date: '2026-12-09', state: 'confirmed' }),
+      sampleRun({ id: 3, date: '2026-12-08' }),
+      sampleRun({ id: 4, date: '2026-12-10' }),
+      sampleRun({ id: 5, date: '2026-12-08', state: 'underway' }),
+      sampleRun({ id: 6, date: '2026-12-07' }),
+    ];
+    expect(runsFor(parcel, runs, '2026-12-08').map(({ id }) => id)).toEqual([1, 2]);
+  });
+});
+
 describe('the shares', () => {
+  it('stand beside what driving alone would cost', () => {
+    expect(sharesOf(sampleRun())[0]?.aloneCents).toBe(3200);
+    expect(sharesOf(sampleRun({ stops: [] }))[0]?.aloneCents).toBeNull();
+  });
+
   it('are added up by breeder and come to the cost of the run', () => {
     const run = sampleRun();
     const shares = sharesOf(run);

@@ -56,18 +56,32 @@ export function couldJoin(waiting: readonly Parcel[], run: Run): Parcel[] {
   );
 }
 
+/** The runs that could take a parcel: still to be driven, not the one it is on, and on a day that is open to it. */
+export function runsFor(parcel: Parcel, runs: readonly Run[], today: string): Run[] {
+  return runs.filter(
+    (run) =>
+      (run.state === 'proposed' || run.state === 'confirmed') &&
+      run.date >= today &&
+      run.id !== parcel.run?.id &&
+      couldJoin([parcel], run).length > 0,
+  );
+}
+
 export interface Share {
   readonly breederId: number;
   readonly name: string;
   readonly parcels: number;
   readonly cents: number;
+  /** What driving there alone would cost this breeder; null when the run has no stop at them. */
+  readonly aloneCents: number | null;
 }
 
 /** What each breeder pays, largest first. */
 export function sharesOf(run: Run): Share[] {
   const shares = new Map<number, Share>();
   for (const { breederId, breederName: name, shareCents } of run.parcels) {
-    const before = shares.get(breederId) ?? { breederId, name, parcels: 0, cents: 0 };
+    const aloneCents = run.stops.find((stop) => stop.breederId === breederId)?.aloneCents ?? null;
+    const before = shares.get(breederId) ?? { breederId, name, parcels: 0, cents: 0, aloneCents };
     shares.set(breederId, { ...before, parcels: before.parcels + 1, cents: before.cents + shareCents });
   }
   return [...shares.values()].sort((a, b) => b.cents - a.cents || a.name.localeCompare(b.name));

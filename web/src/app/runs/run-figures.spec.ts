@@ -1,11 +1,13 @@
 import {
   aboveBest,
   againstAlone,
+  boundText,
   costChange,
   dollars,
   duration,
   load,
   proposalFigures,
+  roadAgainstAlone,
   sharePerParcel,
   slackText,
   stopText,
@@ -17,6 +19,7 @@ describe('the figures of a proposal', () => {
     expect(proposalFigures(sampleProposal()).map((figure) => `${figure.value} ${figure.label}`)).toEqual([
       '$121 for one run',
       '$74.00 less than driving alone',
+      '5 h 00 min less on the road',
       '1.4 % at most above the best possible',
       '0 parcels not placed',
     ]);
@@ -25,6 +28,17 @@ describe('the figures of a proposal', () => {
   it('says so when pooling costs more than driving alone', () => {
     expect(againstAlone(2000, 1500)).toEqual({ value: '$5.00 more', label: 'than driving alone' });
     expect(againstAlone(1500, 1500).value).toBe('The same');
+  });
+
+  it('says so when pooling keeps people on the road for longer', () => {
+    expect(roadAgainstAlone(100, 80)).toEqual({ value: '20 min more', label: 'on the road' });
+  });
+
+  it('calls a bound a limit only when it is proven', () => {
+    expect(boundText(sampleProposal())).toContain('No plan can count less than $123.');
+    const estimate = boundText(sampleProposal({ boundKind: 'estimate' }));
+    expect(estimate).toContain('estimated at $123');
+    expect(estimate).not.toContain('No plan can');
   });
 
   it('promises nothing on a bound that is not proven', () => {

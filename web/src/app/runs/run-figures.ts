@@ -25,6 +25,21 @@ export function againstAlone(costCents: number, aloneCents: number): Figure {
   return { value: `${dollars(Math.abs(less))} ${less > 0 ? 'less' : 'more'}`, label: 'than driving alone' };
 }
 
+/** What pooling does to the hours on the road, against every breeder driving alone. */
+export function roadAgainstAlone(driveMinutes: number, aloneMinutes: number): Figure {
+  const less = Math.round(aloneMinutes) - Math.round(driveMinutes);
+  if (less === 0) return { value: 'The same', label: 'on the road as driving alone' };
+  return { value: `${duration(Math.abs(less))} ${less > 0 ? 'less' : 'more'}`, label: 'on the road' };
+}
+
+/** What the plan is measured by and how low the bound is, in a sentence; only a proven bound is called a limit. */
+export function boundText({ objectiveCents, boundCents, boundKind }: Proposal): string {
+  const valued = `With the driver's time and what is left over, the plan counts ${dollars(objectiveCents)}.`;
+  return boundKind === 'proven'
+    ? `${valued} No plan can count less than ${dollars(boundCents)}.`
+    : `${valued} The best possible is estimated at ${dollars(boundCents)}; the estimate is no proof.`;
+}
+
 /** How far the plan can be from the best one: a promise when the bound is proven, an estimate otherwise. */
 export function aboveBest(gap: number, boundKind: Proposal['boundKind']): Figure {
   const percent = `${(Math.max(gap, 0) * 100).toFixed(1)} %`;
@@ -42,6 +57,7 @@ export function proposalFigures(proposal: Proposal): Figure[] {
       label: proposal.runs.length === 1 ? 'for one run' : `for all ${proposal.runs.length} runs`,
     },
     againstAlone(proposal.costCents, proposal.aloneCents),
+    roadAgainstAlone(proposal.driveMinutes, proposal.aloneMinutes),
     aboveBest(proposal.gap, proposal.boundKind),
     { value: String(left), label: left === 1 ? 'parcel not placed' : 'parcels not placed' },
   ];
@@ -114,7 +130,7 @@ export function duration(minutes: number): string {
 }
 
 /** A change of cost in words, for the preview of a move. */
-export function costChange(cents: number): string {
-  if (cents === 0) return 'The run costs the same.';
-  return `The run costs ${dollars(Math.abs(cents))} ${cents > 0 ? 'more' : 'less'}.`;
+export function costChange(cents: number, which = 'The run'): string {
+  if (cents === 0) return `${which} costs the same.`;
+  return `${which} costs ${dollars(Math.abs(cents))} ${cents > 0 ? 'more' : 'less'}.`;
 }

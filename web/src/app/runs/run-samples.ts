@@ -9,6 +9,7 @@ export function sampleStop(over: Partial<RunStop> = {}): RunStop {
     businessName: 'Third Draw Serpents',
     street: '12 Cypress Rd',
     city: 'Boerne',
+    phone: '210-555-0144',
     lat: 29.79,
     lon: -98.73,
     arriveAt: '2026-12-08T19:10:00.000Z',
@@ -16,6 +17,7 @@ export function sampleStop(over: Partial<RunStop> = {}): RunStop {
     waitMinutes: 0,
     driveMinutes: 35,
     miles: 24,
+    aloneCents: 3200,
     parcelIds: [101, 102],
     ...over,
   };

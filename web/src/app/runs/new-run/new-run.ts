@@ -12,6 +12,7 @@ import type { Parcel } from '@shared/contract';
 import { FieldMessagePipe } from '../../core/http/field-message-pipe';
 import { SessionStore } from '../../core/session/session-store';
 import { errorText } from '../../ui/call-state';
+import { CircleLists } from '../../ui/circle-lists';
 import { NextAction } from '../../ui/next-action/next-action';
 import { PageHeader } from '../../ui/page-header/page-header';
 import { addDays, dateIn, isoWeekday } from '../../ui/plain-dates';
@@ -22,6 +23,7 @@ import { RunsApi } from '../runs-api';
 /** A run by hand: who drives on which day, with which parcels. It is a proposal until it is confirmed. */
 @Component({
   selector: 'db-new-run',
+  providers: [CircleLists],
   imports: [
     FieldMessagePipe,
     MatButton,
@@ -53,39 +55,43 @@ import { RunsApi } from '../runs-api';
 })
 export class NewRun {
   private readonly api = inject(RunsApi);
+  protected readonly lists = inject(CircleLists);
   private readonly router = inject(Router);
   private readonly session = inject(SessionStore);
   protected readonly today = dateIn(this.session.circleZone(), new Date());
-  private readonly lists = rxResource({
+  private readonly choices = rxResource({
     stream: () => forkJoin({ drivers: this.api.drivers(), waiting: this.api.waitingParcels() }),
   });
-  protected readonly isLoading = computed(() => this.lists.isLoading());
-  protected readonly problem = computed(() => errorText(this.lists.error()));
-  protected readonly drivers = computed(() => (this.lists.hasValue() ? this.lists.value().drivers : []));
+  protected readonly isLoading = computed(() => this.choices.isLoading());
+  protected readonly problem = computed(() => errorText(this.choices.error()) ?? this.lists.problem());
+  protected readonly drivers = computed(() => (this.choices.hasValue() ? this.choices.value().drivers : []));
   protected readonly form = inject(NonNullableFormBuilder).group({
     coordinatorId: [this.session.has('coordinator') ? (this.session.me()?.id ?? 0) : 0, Validators.min(1)],
     date: [nextWeekday(this.today), Validators.required],
+    counterId: [0],
     parcelIds: [[] as number[]],
   });
   private readonly date = toSignal(this.form.controls.date.valueChanges, {
     initialValue: this.form.controls.date.value,
   });
   protected readonly joinable = computed(() =>
-    (this.lists.hasValue() ? this.lists.value().waiting : []).filter((parcel) => fits(parcel, this.date())),
+    (this.choices.hasValue() ? this.choices.value().waiting : []).filter((parcel) =>
+      fits(parcel, this.date()),
+    ),
   );
   protected readonly saving = new SaveState();
 
   protected reload(): void {
+    this.choices.reload();
     this.lists.reload();
   }
 
   protected async save(): Promise<void> {
     this.form.markAllAsTouched();
     if (this.form.invalid || this.saving.busy()) return;
-    const value = this.form.getRawValue();
+    const { counterId: given, ...value } = this.form.getRawValue();
     const chosen = this.joinable().filter((parcel) => value.parcelIds.includes(parcel.id));
-    // The run goes to the counter its parcels are checked for.
-    const counterId = chosen[0]?.dropOff.counterId;
+    const counterId = given || chosen[0]?.dropOff.counterId;
     const body = {
       ...value,
       parcelIds: chosen.map(({ id }) => id),

@@ -1,11 +1,12 @@
 import { ChangeDetectionStrategy, Component, computed, inject, signal } from '@angular/core';
 import { rxResource } from '@angular/core/rxjs-interop';
 import { MatButton } from '@angular/material/button';
+import { MatDialog } from '@angular/material/dialog';
 import { MatIcon } from '@angular/material/icon';
 import { MatProgressBar } from '@angular/material/progress-bar';
 import { RouterLink } from '@angular/router';
-import { forkJoin } from 'rxjs';
-import type { Proposal } from '@shared/contract';
+import { firstValueFrom, forkJoin } from 'rxjs';
+import type { Parcel, Proposal, Run } from '@shared/contract';
 import { dayLabel } from '../../core/dates';
 import { DayLabelPipe } from '../../core/day-label-pipe';
 import { SessionStore } from '../../core/session/session-store';
@@ -17,7 +18,8 @@ import { addDays, dateIn, startOfWeek } from '../../ui/plain-dates';
 import { ProblemNote } from '../../ui/problem-note/problem-note';
 import { boardColumns, boardSummary, boardWeeks } from '../board-layout';
 import { RunCard } from '../run-card/run-card';
-import { planFigures, proposalFigures } from '../run-figures';
+import { RunChangeDialog, type RunChange } from '../run-change-dialog/run-change-dialog';
+import { boundText, planFigures, proposalFigures } from '../run-figures';
 import { RunsApi } from '../runs-api';
 import { unplacedItems } from '../unplaced-items';
 import { UnplacedList } from '../unplaced-list/unplaced-list';
@@ -47,8 +49,9 @@ const weeksShown = 3;
 export class RunBoard {
   private readonly api = inject(RunsApi);
   private readonly session = inject(SessionStore);
+  private readonly dialog = inject(MatDialog);
 
-  private readonly today = dateIn(this.session.circleZone(), new Date());
+  protected readonly today = dateIn(this.session.circleZone(), new Date());
   protected readonly offset = signal(0);
   protected readonly proposal = signal<Proposal | null>(null);
   protected readonly proposing = new CallState();
@@ -59,7 +62,7 @@ export class RunBoard {
       forkJoin({ runs: this.api.list(params.from, params.to), waiting: this.api.waitingParcels() }),
   });
   protected readonly problem = computed(() => errorText(this.board.error()));
-  private readonly known = computed(() =>
+  protected readonly known = computed(() =>
     this.board.hasValue() ? this.board.value() : { runs: [], waiting: [] },
   );
   protected readonly weeks = computed(() =>
@@ -88,6 +91,24 @@ export class RunBoard {
       this.unplaced().length,
     );
   });
+
+  protected readonly bound = computed(() => {
+    const proposal = this.proposal();
+    return proposal && proposal.runs.length > 0 ? boundText(proposal) : '';
+  });
+
+  protected async putOn(parcel: Parcel, run: Run): Promise<void> {
+    const data: RunChange = {
+      run,
+      patch: { addParcelIds: [parcel.id] },
+      title: `Put ${parcel.code} on the run on ${dayLabel(run.date, 'medium')}?`,
+    };
+    const dialog = this.dialog.open<RunChangeDialog, RunChange, Run>(RunChangeDialog, {
+      data,
+      width: '480px',
+    });
+    if (await firstValueFrom(dialog.afterClosed())) this.board.reload();
+  }
 
   protected async proposeRuns(): Promise<void> {
     const proposal = await this.proposing.run(this.api.propose());

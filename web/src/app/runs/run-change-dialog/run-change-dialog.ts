@@ -3,6 +3,7 @@ import { rxResource } from '@angular/core/rxjs-interop';
 import { MatButton } from '@angular/material/button';
 import { MAT_DIALOG_DATA, MatDialogModule, MatDialogRef } from '@angular/material/dialog';
 import { MatProgressBar } from '@angular/material/progress-bar';
+import { forkJoin, of } from 'rxjs';
 import type { Run, RunPatch } from '@shared/contract';
 import { clock } from '../../core/dates';
 import { CallState, errorText } from '../../ui/call-state';
@@ -14,6 +15,8 @@ export interface RunChange {
   readonly run: Run;
   readonly patch: RunPatch;
   readonly title: string;
+  /** The run that the parcels come from, for a move. */
+  readonly from?: { readonly run: Run; readonly parcelId: number };
 }
 
 /** What a change would cost and break, before it is made. Closes with the run as saved. */
@@ -82,15 +85,22 @@ export class RunChangeDialog {
   protected readonly change = inject<RunChange>(MAT_DIALOG_DATA);
   protected readonly isConfirmed = this.change.run.state === 'confirmed';
   protected readonly preview = rxResource({
-    stream: () => this.api.preview(this.change.run, this.change.patch),
+    stream: () =>
+      forkJoin({
+        here: this.api.preview(this.change.run, this.change.patch),
+        there: this.change.from
+          ? this.api.preview(this.change.from.run, { removeParcelIds: [this.change.from.parcelId] })
+          : of(null),
+      }),
   });
   protected readonly failed = computed(() => errorText(this.preview.error()));
   protected readonly problems = computed(() =>
-    this.preview.hasValue() ? this.preview.value().problems : [],
+    this.preview.hasValue() ? this.preview.value().here.problems : [],
   );
   protected readonly effects = computed(() => {
     if (!this.preview.hasValue()) return null;
-    const { before, after, costChangeCents } = this.preview.value();
+    const { here, there } = this.preview.value();
+    const { before, after, costChangeCents } = here;
     const minutes = Math.round(after.driveMinutes - before.driveMinutes);
     const lines = [costChange(costChangeCents)];
     if (minutes !== 0)
@@ -102,6 +112,7 @@ export class RunChangeDialog {
     lines.push(
       `The vehicle is filled with ${Math.round(after.loadL)} of ${Math.round(after.coordinator.capacityL)} L.`,
     );
+    if (there) lines.push(costChange(there.costChangeCents, 'The run it leaves'));
     return lines;
   });
   protected readonly saving = new CallState();

@@ -18,7 +18,7 @@ import { MatIcon } from '@angular/material/icon';
 import { MatInput } from '@angular/material/input';
 import { MatProgressBar } from '@angular/material/progress-bar';
 import { MatSelectModule } from '@angular/material/select';
-import { firstValueFrom, of, type Observable } from 'rxjs';
+import { firstValueFrom, forkJoin, of, type Observable } from 'rxjs';
 import type { Parcel, Run, RunParcel, RunPatch } from '@shared/contract';
 import { ClockPipe } from '../../core/clock-pipe';
 import { dayLabel } from '../../core/dates';
@@ -29,7 +29,7 @@ import { confirmed } from '../../ui/confirm-dialog/confirm-dialog';
 import { MoneyPipe } from '../../ui/money-pipe';
 import { NextAction } from '../../ui/next-action/next-action';
 import { PageHeader } from '../../ui/page-header/page-header';
-import { dateIn } from '../../ui/plain-dates';
+import { addDays, dateIn } from '../../ui/plain-dates';
 import { PlanningAid } from '../../ui/planning-aid/planning-aid';
 import { ProblemNote } from '../../ui/problem-note/problem-note';
 import { RunMap } from '../../ui/run-map/run-map';
@@ -38,12 +38,29 @@ import { StateChip } from '../../ui/state-chip/state-chip';
 import { AboardDialog } from '../aboard-dialog/aboard-dialog';
 import { CallOffDialog } from '../call-off-dialog/call-off-dialog';
 import { HandOverDialog } from '../hand-over-dialog/hand-over-dialog';
-import { couldJoin, runActions, runNeed, sharesOf, toldOnConfirmation, type RunAction } from '../run-actions';
+import { NextStop } from '../next-stop/next-stop';
+import {
+  couldJoin,
+  runActions,
+  runNeed,
+  runsFor,
+  sharesOf,
+  toldOnConfirmation,
+  type RunAction,
+} from '../run-actions';
 import { RunChangeDialog, type RunChange } from '../run-change-dialog/run-change-dialog';
 import { duration, load } from '../run-figures';
 import { RunParcels, type ParcelWish } from '../run-parcels/run-parcels';
 import { RunSheet } from '../run-sheet/run-sheet';
 import { RunsApi, type TrackingEntry } from '../runs-api';
+
+/** What a change of a run can draw on: the parcels that wait, and the other runs of the coming weeks. */
+interface Around {
+  readonly parcels: readonly Parcel[];
+  readonly runs: readonly Run[];
+}
+const nothing: Around = { parcels: [], runs: [] };
+const daysAhead = 28;
 
 /** One run from proposal to hand-over: the drive, what is on it, what it costs, and the one thing to do next. */
 @Component({
@@ -58,6 +75,7 @@ import { RunsApi, type TrackingEntry } from '../runs-api';
     MatSelectModule,
     MoneyPipe,
     NextAction,
+    NextStop,
     PageHeader,
     PlanningAid,
     ProblemNote,
@@ -90,10 +108,25 @@ export class RunPage {
   );
   private readonly waiting = rxResource({
     params: () => ({ asks: this.can('change'), version: this.run()?.version }),
-    stream: ({ params }) => (params.asks ? this.api.waitingParcels() : of([])),
+    stream: ({ params }) => (params.asks ? this.around() : of(nothing)),
   });
-  protected readonly joinable = computed(() =>
-    this.ofRun((run) => couldJoin(this.waiting.hasValue() ? this.waiting.value() : [], run), []),
+  private readonly known = computed(() => (this.waiting.hasValue() ? this.waiting.value() : nothing));
+  protected readonly joinable = computed(() => this.ofRun((run) => couldJoin(this.known().parcels, run), []));
+  /** Off a confirmed run a parcel is taken first, so only a proposal's can move straight on. */
+  protected readonly targets = computed(() =>
+    this.ofRun(
+      (run) => (run.state === 'proposed' ? this.targetsOf(run) : new Map<number, Run[]>()),
+      new Map(),
+    ),
+  );
+  protected readonly isOnTheDay = computed(() =>
+    this.ofRun(
+      (run) =>
+        this.isDriver() &&
+        (run.state === 'underway' ||
+          (run.state === 'confirmed' && run.date === dateIn(run.zone, new Date()))),
+      false,
+    ),
   );
   protected readonly title = computed(() =>
     this.ofRun((run) => `${dayLabel(run.date)}, ${run.coordinator.name}`, 'Run'),
@@ -136,6 +169,15 @@ export class RunPage {
   protected add(run: Run, parcel: Parcel): Promise<void> {
     const patch: RunPatch = { addParcelIds: [parcel.id] };
     return this.ask({ run, patch, title: `Put ${parcel.code} on this run?` });
+  }
+
+  protected move(run: Run, { id, code }: RunParcel, target: Run): Promise<void> {
+    return this.ask({
+      run: target,
+      patch: { addParcelIds: [id] },
+      title: `Move ${code} to ${target.coordinator.name} on ${dayLabel(target.date, 'medium')}?`,
+      from: { run, parcelId: id },
+    });
   }
 
   protected async confirm(run: Run): Promise<void> {
@@ -184,7 +226,29 @@ export class RunPage {
 
   private async ask(change: RunChange): Promise<void> {
     const saved = await this.open<Run>(RunChangeDialog, change);
-    if (saved) this.show(saved);
+    if (!saved) return;
+    // After a move the answer is the other run; this one is read again.
+    if (change.from) this.reload();
+    else this.show(saved);
+  }
+
+  private around(): Observable<Around> {
+    const today = dateIn(this.session.circleZone(), new Date());
+    return forkJoin({
+      parcels: this.api.waitingParcels(),
+      runs: this.api.list(today, addDays(today, daysAhead)),
+    });
+  }
+
+  private targetsOf(run: Run): Map<number, Run[]> {
+    const { parcels, runs } = this.known();
+    const today = dateIn(run.zone, new Date());
+    const own = new Set(run.parcels.map((parcel) => parcel.id));
+    return new Map(
+      parcels
+        .filter((parcel) => own.has(parcel.id))
+        .map((parcel) => [parcel.id, runsFor(parcel, runs, today)]),
+    );
   }
 
   private open<R>(component: Type<unknown>, data: unknown): Promise<R | undefined> {

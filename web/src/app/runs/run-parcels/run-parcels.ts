@@ -5,6 +5,7 @@ import { MatIcon } from '@angular/material/icon';
 import { MatMenuModule } from '@angular/material/menu';
 import { RouterLink } from '@angular/router';
 import type { Run, RunParcel } from '@shared/contract';
+import { DayLabelPipe } from '../../core/day-label-pipe';
 import { MoneyPipe } from '../../ui/money-pipe';
 import { VerdictChip } from '../../ui/verdict-chip/verdict-chip';
 
@@ -13,7 +14,16 @@ export type ParcelWish = 'pin' | 'unpin' | 'take-off';
 /** The parcels of a run with their share; those who plan it may pin one or take it off. */
 @Component({
   selector: 'db-run-parcels',
-  imports: [DecimalPipe, MatIcon, MatIconButton, MatMenuModule, MoneyPipe, RouterLink, VerdictChip],
+  imports: [
+    DayLabelPipe,
+    DecimalPipe,
+    MatIcon,
+    MatIconButton,
+    MatMenuModule,
+    MoneyPipe,
+    RouterLink,
+    VerdictChip,
+  ],
   template: `<ul>
     @for (parcel of run().parcels; track parcel.id) {
       <li>
@@ -48,6 +58,12 @@ export type ParcelWish = 'pin' | 'unpin' | 'take-off';
             >
               <mat-icon svgIcon="pin" aria-hidden="true" />{{ parcel.pinned ? 'Unpin' : 'Pin: keep it here' }}
             </button>
+            @for (target of targets().get(parcel.id) ?? []; track target.id) {
+              <button mat-menu-item type="button" (click)="moved.emit({ parcel, target })">
+                <mat-icon svgIcon="arrow-right" aria-hidden="true" />Move to
+                {{ target.date | dayLabel: 'medium' }}, {{ target.coordinator.name }}
+              </button>
+            }
             <button mat-menu-item type="button" (click)="wished.emit({ parcel, wish: 'take-off' })">
               <mat-icon svgIcon="minus" aria-hidden="true" />Take off this run
             </button>
@@ -118,5 +134,8 @@ export type ParcelWish = 'pin' | 'unpin' | 'take-off';
 export class RunParcels {
   readonly run = input.required<Run>();
   readonly changeable = input(false);
+  /** The other runs that could take a parcel, by its id. */
+  readonly targets = input<ReadonlyMap<number, readonly Run[]>>(new Map());
+  readonly moved = output<{ parcel: RunParcel; target: Run }>();
   readonly wished = output<{ parcel: RunParcel; wish: ParcelWish }>();
 }

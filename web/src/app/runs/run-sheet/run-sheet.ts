@@ -3,6 +3,7 @@ import { MatIcon } from '@angular/material/icon';
 import { RouterLink } from '@angular/router';
 import type { Run } from '@shared/contract';
 import { ClockPipe } from '../../core/clock-pipe';
+import { geo } from '../next-stops';
 import { duration, slackText, stopText } from '../run-figures';
 
 /** The drive stop by stop with its clock: for the driver on the road, for a breeder who waits, and for the printer. */
@@ -38,6 +39,12 @@ import { duration, slackText, stopText } from '../run-figures';
               to {{ row.stop.breederName }}</span
             ></a
           >
+          @if (showsStart() && row.stop.phone; as phone) {
+            <a class="way" [href]="'tel:' + phone"
+              ><mat-icon svgIcon="call" aria-hidden="true" />{{ phone
+              }}<span class="db-sr"> of {{ row.stop.breederName }}</span></a
+            >
+          }
         </div>
       </li>
     }
@@ -108,6 +115,7 @@ import { duration, slackText, stopText } from '../run-figures';
       gap: 6px;
       align-items: center;
       min-height: 44px;
+      margin-right: 18px;
       font-weight: 600;
       text-underline-offset: 3px;
     }
@@ -134,8 +142,7 @@ export class RunSheet {
       stop,
       text: stopText(stop, this.run()),
       address: [stop.street, stop.city].filter(Boolean).join(', '),
-      // RFC 5870: whatever map the phone has opens it.
-      geo: `geo:${stop.lat},${stop.lon}`,
+      geo: geo(stop),
       parcels: this.run().parcels.filter((parcel) => stop.parcelIds.includes(parcel.id)),
     })),
   );
