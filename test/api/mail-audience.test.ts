@@ -207,6 +207,8 @@ describe('Who hears of what', () => {
       reason: 'Ice.',
     });
     expect(mails.flatMap(({ to }) => to).sort()).toEqual([bea, bo, cora, otto, uma]);
+    for (const to of [bea, cora]) expect(onlyMailTo(mails, to).parsed.text).toContain('Ice.');
+    expect(onlyMailTo(mails, bo).parsed.text).toContain('Was to arrive: Wednesday, December 9');
   });
 
   it('a parcel put on hold leaves its run: one mail to the buyer takes the arrival back', async () => {

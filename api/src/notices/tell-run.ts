@@ -190,6 +190,7 @@ async function takeBackArrival(deps: Deps, parcel: Parcel, key: string): Promise
         'The drive to the carrier’s counter that it was on does not take it. You hear as soon as another is arranged or another day is chosen; until then there is nothing to collect.',
       ],
       facts: [
+        ...(parcel.arrivalDate ? [['Was to arrive', longDate(parcel.arrivalDate)] as const] : []),
         ['Parcel', parcel.code],
         ['Place', placeOf(parcel)],
       ],
