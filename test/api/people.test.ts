@@ -140,14 +140,12 @@ describe('changing a person', () => {
 describe('what a person changes of themselves', () => {
   it('is name, phone, zone, unit and own profile; roles and the counter are the admin’s', async () => {
     const breeder = await site.as('breeder@example.org');
-    const { body } = await breeder
-      .patch('/api/me')
-      .send({
-        phone: '830-555-0199',
-        temperatureUnit: 'C',
-        breeder: { windowOpenMinute: 600 },
-        roles: ['admin'],
-      });
+    const { body } = await breeder.patch('/api/me').send({
+      phone: '830-555-0199',
+      temperatureUnit: 'C',
+      breeder: { windowOpenMinute: 600 },
+      roles: ['admin'],
+    });
     const me = (await breeder.get('/api/me').expect(200)).body as Person;
     expect(me.roles).toEqual(['breeder']);
     if ((body as Person).phone)

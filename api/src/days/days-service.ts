@@ -129,12 +129,19 @@ async function draftOf(deps: Deps, parcel: Parcel): Promise<RouteDraft> {
   };
 }
 
+interface DoorRow {
+  readonly id: number;
+  readonly door_postal_code: string | null;
+  readonly door_lat: number | null;
+  readonly door_lon: number | null;
+}
+
 /** Where the door is: as stored, or by its ZIP when that is a change not saved yet. */
 async function doorOf({ db, services }: Deps, parcel: Parcel) {
   const { name, city, state, postalCode, zone } = parcel.destination;
-  const stored = (await db('parcels')
+  const stored = await db<DoorRow>('parcels')
     .where({ id: parcel.id, door_postal_code: postalCode })
-    .first('door_lat', 'door_lon')) as { door_lat: number | null; door_lon: number | null } | undefined;
+    .first('door_lat', 'door_lon');
   if (stored?.door_lat != null && stored.door_lon != null)
     return { name, city, state, zone, lat: stored.door_lat, lon: stored.door_lon };
   const zip = await services.places.postalCode(postalCode);

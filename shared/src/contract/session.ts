@@ -38,7 +38,10 @@ export const newPassword = z
 
 /** `PUT /api/me/password`. */
 export const passwordChange = z.object({
-  current: z.string().min(1, 'Enter your present password.').max(200, 'A password has at most 200 characters.'),
+  current: z
+    .string()
+    .min(1, 'Enter your present password.')
+    .max(200, 'A password has at most 200 characters.'),
   next: newPassword,
 });
 export type PasswordChange = z.infer<typeof passwordChange>;

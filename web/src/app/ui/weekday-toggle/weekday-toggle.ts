@@ -7,7 +7,12 @@ import { weekdays } from '../weekdays';
 @Component({
   selector: 'db-weekday-toggle',
   imports: [MatButtonToggleModule, ReactiveFormsModule],
-  template: `<mat-button-toggle-group multiple hideMultipleSelectionIndicator [formControl]="control()" [attr.aria-label]="label()">
+  template: `<mat-button-toggle-group
+    multiple
+    hideMultipleSelectionIndicator
+    [formControl]="control()"
+    [attr.aria-label]="label()"
+  >
     @for (day of days; track day.iso) {
       <mat-button-toggle [value]="day.iso" [aria-label]="day.long">{{ day.short }}</mat-button-toggle>
     }
