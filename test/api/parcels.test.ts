@@ -344,10 +344,13 @@ describe('the life of a parcel', () => {
     expect(texts.at(-1)).toBe(
       `Bea Breeder: Entered ${parcel.code}: 1 corn snake for Bo Buyer in Phoenix, AZ.`,
     );
-    const tamper = async (change: (history: Knex.QueryBuilder) => PromiseLike<unknown>) => {
-      await change(site.db('history'));
-    };
-    await expect(tamper((history) => history.update({ text: 'nothing' }))).rejects.toThrow('append-only');
-    await expect(tamper((history) => history.delete())).rejects.toThrow('append-only');
+    // The driver's errors are of another realm than the test's, so their words are compared.
+    const tamper = (change: (history: Knex.QueryBuilder) => PromiseLike<unknown>) =>
+      change(site.db('history')).then(
+        () => 'it was changed',
+        (error: unknown) => String(error),
+      );
+    expect(await tamper((history) => history.update({ text: 'nothing' }))).toContain('append-only');
+    expect(await tamper((history) => history.delete())).toContain('append-only');
   });
 });
