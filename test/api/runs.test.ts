@@ -91,6 +91,9 @@ describe('POST /runs/proposals', () => {
     expect(proposal.boundCents).toBe(proposal.objectiveCents);
     expect(proposal.gap).toBe(0);
     expect(proposal.aloneCents).toBe(run.aloneCents);
+    // Each breeder sees their own part of what driving alone would cost; the parts make up the whole.
+    expect(run.stops.reduce((sum, stop) => sum + stop.aloneCents, 0)).toBe(run.aloneCents);
+    expect(run.stops.every((stop) => stop.aloneCents > 0)).toBe(true);
     // Nobody hears of a proposal, and no parcel has moved.
     expect((await site.mails()).filter(({ invites }) => invites)).toEqual([]);
     expect(await site.parcel(mine.id)).toMatchObject({

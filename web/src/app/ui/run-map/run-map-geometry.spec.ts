@@ -65,6 +65,37 @@ describe('the run sketch map', () => {
     expect(Math.abs((first?.labelY ?? 0) - (second?.labelY ?? 0))).toBeGreaterThanOrEqual(16);
   });
 
+  it('keeps a label off the marker of another place', () => {
+    const sketch = sketchMap(
+      [
+        { ...place('start', 29.541, -98.554), name: 'start' },
+        { ...place('stop', 29.8825, -97.941), name: 'San Marcos' },
+        { ...place('stop', 29.35, -98.88), name: 'Castroville' },
+        { ...place('counter', 29.534, -98.47), name: 'Airport counter' },
+      ],
+      { width: 480, height: 320, padding: 40 },
+    );
+    const [start, , , counter] = sketch.points;
+    expect(start?.anchor === 'end' || Math.abs((start?.labelY ?? 0) - (counter?.y ?? 0) - 5) >= 17).toBe(
+      true,
+    );
+  });
+
+  it('points an arrow along each leg: east is 0°, south 90° on a screen', () => {
+    const sketch = sketchMap(
+      [place('start', 29.5, -98.5), place('stop', 29.5, -98.1), place('counter', 29.2, -98.1)],
+      size,
+    );
+    expect(sketch.arrows.map(({ angle }) => angle)).toEqual([0, 90]);
+  });
+
+  it('draws the lines of round degrees where such places lie', () => {
+    const sketch = sketchMap([place('start', 29, -99), place('counter', 30, -98)], size);
+    const [start] = sketch.points;
+    expect(sketch.grid).toContain(`M0 ${start?.y}H400`);
+    expect(sketch.grid).toContain(`M${start?.x} 0V300`);
+  });
+
   it('gives a scale of round miles that is no longer than a third of the picture', () => {
     const { scale } = sketchMap([place('start', 29.4, -98.5), place('counter', 29.8, -98.1)], size);
     expect([1, 2, 5, 10, 20, 50]).toContain(scale.miles);

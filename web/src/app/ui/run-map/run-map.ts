@@ -1,7 +1,7 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
 import { sketchMap, type MapPlace } from './run-map-geometry';
 
-const size = { width: 640, height: 360, padding: 44 };
+const size = { width: 480, height: 330, padding: 42 };
 
 /** A run's places in road order, drawn to scale. The list of stops says the same in words, so the picture is one image. */
 @Component({
@@ -11,7 +11,15 @@ const size = { width: 640, height: 360, padding: 44 };
     role="img"
     [attr.aria-label]="label()"
   >
+    <path class="grid" [attr.d]="sketch().grid" />
     <path class="road" [attr.d]="sketch().path" />
+    @for (arrow of sketch().arrows; track $index) {
+      <path
+        class="arrow"
+        d="M-5 -6L5 0L-5 6"
+        [attr.transform]="'translate(' + arrow.x + ' ' + arrow.y + ') rotate(' + arrow.angle + ')'"
+      />
+    }
     @for (point of sketch().points; track $index) {
       @switch (point.kind) {
         @case ('start') {
@@ -55,6 +63,18 @@ const size = { width: 640, height: 360, padding: 44 };
       stroke-dasharray: 1 7;
       stroke-linecap: round;
     }
+    .grid {
+      fill: none;
+      stroke: var(--db-line);
+      stroke-width: 1;
+    }
+    .arrow {
+      fill: none;
+      stroke: var(--db-juniper);
+      stroke-width: 2.4;
+      stroke-linecap: round;
+      stroke-linejoin: round;
+    }
     .start {
       fill: var(--db-paper);
       stroke: var(--db-ink-2);
@@ -71,7 +91,7 @@ const size = { width: 640, height: 360, padding: 44 };
     text {
       font-family: 'Work Sans', sans-serif;
       fill: var(--db-ink);
-      font-size: 15px;
+      font-size: 14px;
     }
     .name {
       paint-order: stroke;
