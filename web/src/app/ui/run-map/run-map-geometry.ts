@@ -80,7 +80,7 @@ export function sketchMap(places: readonly MapPlace[], size: MapSize): MapSketch
 }
 
 /** Legs too short for an arrow are left without. */
-function arrowsOf(points: readonly MapPoint[]): MapSketch['arrows'] {
+function arrowsOf(points: readonly Bare[]): MapSketch['arrows'] {
   return points.slice(1).flatMap((to, index) => {
     const from = points[index];
     if (!from || Math.hypot(to.x - from.x, to.y - from.y) < shortestArrowLeg) return [];
