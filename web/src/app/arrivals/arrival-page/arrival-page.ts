@@ -56,6 +56,11 @@ export class ArrivalPage {
     const arrival = this.arrival();
     return arrival !== null && canReport(arrival);
   });
+  /** Once it has arrived the head of the page tells the outcome; the report is shown again only for its words. */
+  protected readonly hasMoreToTell = computed(() => {
+    const arrival = this.arrival();
+    return arrival?.report != null && (arrival.status !== 'arrived' || arrival.report.text !== '');
+  });
   protected readonly saving = new CallState();
   protected readonly saved = signal('');
   protected readonly reported = reportText;

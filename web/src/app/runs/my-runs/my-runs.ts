@@ -140,6 +140,7 @@ export class MyRuns {
     const driver = run.coordinator.name;
     if (!stop) return `${driver} drives.`;
     const at = clock(stop.arriveAt, run.zone);
+    if (run.state === 'underway') return `${driver} was planned at ${at} and is on the way to the counter.`;
     return run.state === 'handed-over' || run.state === 'closed'
       ? `${driver} was planned at ${at}; it is handed over.`
       : `${driver} comes at about ${at}.`;

@@ -49,7 +49,7 @@ export interface RunChange {
           }
         </ul>
       }
-      @if (isConfirmed) {
+      @if (isConfirmed && !isRefused()) {
         <p class="db-hint">The people it concerns get a mail, and their calendars follow.</p>
       }
       <db-problem-note [message]="saving.message() ?? failed()" />
@@ -60,7 +60,7 @@ export interface RunChange {
         matButton="filled"
         class="db-go"
         type="button"
-        [disabled]="!preview.hasValue() || saving.busy()"
+        [disabled]="!preview.hasValue() || isRefused() || saving.busy()"
         (click)="save()"
       >
         Do it
@@ -97,6 +97,12 @@ export class RunChangeDialog {
   protected readonly problems = computed(() =>
     this.preview.hasValue() ? this.preview.value().here.problems : [],
   );
+  /** A confirmed run takes nothing on that would break it; taking off is always allowed while something stays. */
+  protected readonly isRefused = computed(() => {
+    if (!this.isConfirmed || !this.preview.hasValue() || this.problems().length === 0) return false;
+    const isAdding = (this.change.patch.addParcelIds ?? []).length > 0;
+    return isAdding || this.preview.value().here.after.parcels.length === 0;
+  });
   protected readonly effects = computed(() => {
     if (!this.preview.hasValue()) return null;
     const { here, there } = this.preview.value();
