@@ -1,5 +1,6 @@
 import { spawn } from 'node:child_process';
 import { existsSync, mkdirSync, readFileSync, rmSync } from 'node:fs';
+import { resolve } from 'node:path';
 import { buildAll } from './build';
 import { findChromium } from './chromium';
 
@@ -38,7 +39,8 @@ async function main(): Promise<void> {
       ['node_modules/@playwright/test/cli.js', 'test', '--config', 'test/browser/playwright.config.ts'],
       {
         CHROMIUM_PATH: chromium,
-        PLAYWRIGHT_JSON_OUTPUT_NAME: `${results}/browser.json`,
+        // Relative names would be taken from the configuration's folder.
+        PLAYWRIGHT_JSON_OUTPUT_FILE: resolve(results, 'browser.json'),
       },
     );
     countPlaywright(`${results}/browser.json`);
