@@ -28,7 +28,7 @@ export const closedParcels: readonly ParcelSeed[] = [
 
 /** Of the last run: the first two are reported arrived, the third is not yet heard of. */
 export const arrivedParcels: readonly ParcelSeed[] = [
-  parcel(hanna, 'buyer', [['corn snake', 1]], 'Small box'),
+  parcel(hanna, 'buyer', [['corn snake', 1]], 'Medium box'),
   parcel(priya, 'fay', [['bearded dragon', 1]], 'Medium box'),
   parcel(tomas, 'rosa', [['leopard gecko', 3]], 'Small box'),
 ];
@@ -41,7 +41,7 @@ export const aboardParcels: readonly ParcelSeed[] = [
 
 /** Waiting for their days: two runs, a day of one's own, one on hold and five left open are made from these, in order. */
 export const comingParcels: readonly ParcelSeed[] = [
-  parcel(hanna, 'buyer', [['corn snake', 2]], 'Small box'),
+  parcel(hanna, 'buyer', [['corn snake', 2]], 'Medium box'),
   parcel(tomas, 'ellis', [['crested gecko', 2]], 'Small box'),
   parcel(priya, 'sofia', [['bearded dragon', 1]], 'Medium box'),
   parcel(june, 'gus', [['kingsnake', 1]], 'Small box'),
@@ -61,13 +61,13 @@ export const comingParcels: readonly ParcelSeed[] = [
   ),
   parcel(june, 'carmen', [['ball python', 2]], 'Medium box'),
   parcel(walt, 'theo', [['boa', 1]], 'Large box'),
-  parcel(marco, 'piet', [['corn snake', 1]], 'Small box'),
+  parcel(marco, 'piet', [['corn snake', 1]], 'Medium box'),
   parcel(tomas, 'nils', [['leopard gecko', 1]], 'Small box'),
 ];
 
 /** Entered, no day chosen yet. */
 export const draftParcels: readonly ParcelSeed[] = [
-  parcel(hanna, 'hugo', [['corn snake', 1]], 'Small box'),
+  parcel(hanna, 'hugo', [['corn snake', 1]], 'Medium box'),
   parcel(june, 'lena', [['kingsnake', 1]], 'Small box'),
   parcel(priya, 'oskar', [['blue-tongued skink', 1]], 'Large box'),
 ];

@@ -2,12 +2,13 @@ import type { Arrival, Parcel } from '@shared/contract';
 import type { Caller } from '../support/test-site';
 import { createWeatherSite, parcelBody, type WeatherSite } from '../support/weather-site';
 
+/** Wednesday morning in Texas: the forecast reaches past a late arrival of next Monday's parcels. */
 let site: WeatherSite;
 let breeder: Caller;
 let guest: Caller;
 
 beforeAll(async () => {
-  site = await createWeatherSite();
+  site = await createWeatherSite('2026-12-02T12:00:00.000Z');
   breeder = await site.as('breeder@example.org');
   guest = await site.as(null);
 });

@@ -2,12 +2,13 @@ import type { Blackout, BlackoutList, BlackoutPreview, Parcel, Run } from '@shar
 import type { Caller } from '../support/test-site';
 import { createWeatherSite, parcelBody, type WeatherSite } from '../support/weather-site';
 
+/** Wednesday morning in Texas: the forecast reaches past a late arrival of next Monday's parcels. */
 let site: WeatherSite;
 let admin: Caller;
 let breeder: Caller;
 
 beforeEach(async () => {
-  site = await createWeatherSite();
+  site = await createWeatherSite('2026-12-02T12:00:00.000Z');
   admin = await site.as('admin@example.org');
   breeder = await site.as('breeder@example.org');
 });

@@ -37,7 +37,8 @@ describe('a route check', () => {
       '2026-12-04': 'shut',
       '2026-12-05': 'shut',
       '2026-12-06': 'shut',
-      '2026-12-07': 'open',
+      // The forecast ends before a late parcel of Monday's would arrive.
+      '2026-12-07': 'tight',
       '2026-12-09': 'far',
       '2026-12-11': 'shut',
     });
@@ -51,7 +52,7 @@ describe('a route check', () => {
       forecastAgeMinutes: 0,
     });
     expect(answer.days[1]).toMatchObject({
-      outdoor: { lowF: 55, highF: 75 },
+      outdoor: { lowF: 47, highF: 60 },
       slackDays: 1,
       arrival: { place: 'Phoenix counter' },
     });
@@ -66,6 +67,9 @@ describe('a route check', () => {
       destination: 'the door in Denver',
       destinationZone: 'America/Denver',
     });
+    // A hardy animal, so that only the guard rails speak.
+    const hardy = { band_low_f: 0, band_high_f: 130, endurance_low_f: -20, endurance_high_f: 139 };
+    await site.db('species').where({ id: site.ids.cornSnake }).update(hardy);
     // Guard rail for a door 85 °F, for a counter 90 °F: an afternoon of 88 °F in Denver shuts only the door.
     site.weather.script({
       coldSnap: {
@@ -74,7 +78,7 @@ describe('a route check', () => {
         radiusMiles: 60,
         fromIso: '2026-12-01T00:00:00Z',
         toIso: '2026-12-09T00:00:00Z',
-        deltaF: 13,
+        deltaF: 27,
       },
     });
     site.setNow('2026-12-01T14:00:00.000Z');
@@ -92,7 +96,7 @@ describe('a route check', () => {
         radiusMiles: 40,
         fromIso: '2026-12-07T07:00:00Z',
         toIso: '2026-12-08T07:00:00Z',
-        deltaF: -30,
+        deltaF: -22,
       },
     });
     const after = await check();
@@ -102,10 +106,27 @@ describe('a route check', () => {
       '2026-12-07': 'shut',
       '2026-12-06': 'shut',
     });
-    // 55 °F less 30 is 25 °F at 6 in the morning.
+    // 47 °F less 22 is 25 °F at 6 in the morning.
     expect(after.days.find(({ date }) => date === '2026-12-07')?.reasons[0]?.text).toBe(
       'Phoenix falls to 25 °F at 6 am Monday, 13 °F under the limit of 38 °F.',
     );
+  });
+
+  it('tells the air in the box hour by hour when it is asked for, and else not', async () => {
+    const traced = await check({ from: '2026-12-02', days: 1, trace: true });
+    const [day] = traced.days;
+    expect(day?.chance).toBeGreaterThan(0.95);
+    expect(day?.inBox?.lowF).toBeGreaterThan(60);
+    expect(day?.trace?.[0]).toMatchObject({
+      tempF: 75,
+      leg: 'packed',
+      place: 'San Antonio',
+      zone: 'America/Chicago',
+    });
+    // The planned way ends with the pickup at 11:00 in Phoenix, the late one a day after.
+    expect(day?.trace?.findLast(({ tempF }) => tempF !== null)?.at).toBe('2026-12-03T18:00:00.000Z');
+    expect(day?.trace?.at(-1)?.at).toBe('2026-12-04T18:00:00.000Z');
+    expect((await check({ days: 1 })).days[0]?.trace).toBeUndefined();
   });
 
   it('is shut by a warning in force on the route, and only while it is', async () => {

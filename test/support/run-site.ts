@@ -44,8 +44,9 @@ export interface RunSite extends TestSite {
 /** The small circle in steady, mild weather: working days are open, but for the days before a weekend. */
 export async function createRunSite(now = '2026-12-01T12:00:00.000Z'): Promise<RunSite> {
   const clock = { now };
-  const fake = createForecastFake({ seed: 1, now: () => Date.parse(clock.now) });
-  fake.script({ steady: { lowF: 62, highF: 76 } });
+  // A day further than usual, so that a late parcel of next Monday's is covered.
+  const fake = createForecastFake({ seed: 1, now: () => Date.parse(clock.now), furtherHours: 24 });
+  fake.script({ steady: { lowF: 47, highF: 60 } });
   const port = await fake.listen(0);
   const site = await createTestSite({ now, env: { FORECAST_URL: `http://127.0.0.1:${port}` } });
   const callers = new Map<string, Promise<Caller>>();

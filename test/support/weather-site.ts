@@ -6,14 +6,14 @@ export interface WeatherSite extends TestSite {
 }
 
 /**
- * A test site whose forecasts come from a stand-in over a socket: every day everywhere from 55 to 75 °F, which suits every species
+ * A test site whose forecasts come from a stand-in over a socket: every day everywhere from 47 to 60 °F, which suits every species (with a heat pack)
  * of the small circle, until `weather.script` says otherwise. Its clock follows the site's.
  */
 export async function createWeatherSite(now = '2026-12-01T12:00:00.000Z'): Promise<WeatherSite> {
   let nowMs = Date.parse(now);
   const weather = createForecastFake({ seed: 1, now: () => nowMs });
   const port = await weather.listen(0);
-  weather.script({ steady: { lowF: 55, highF: 75 } });
+  weather.script({ steady: { lowF: 47, highF: 60 } });
   const site = await createTestSite({ now, env: { FORECAST_URL: `http://127.0.0.1:${port}` } });
   return {
     ...site,

@@ -6,7 +6,7 @@ import { route, type AnyRoute } from '../http/route';
 const daysQuery = z.object({
   from: plainDate.optional(),
   days: z.coerce.number().int().min(1).max(28).default(14),
-  trace: z.string().optional(),
+  trace: z.enum(['0', '1']).default('0'),
 });
 
 /** Verdicts: of a stored parcel, or of a question before there is a sale. */
@@ -34,6 +34,7 @@ export function daysRoutes({ services }: Deps): AnyRoute[] {
         await services.parcels.forActor(actor, params.id);
         return services.days.forParcel(params.id, {
           days: query.days,
+          trace: query.trace === '1',
           ...(query.from ? { from: query.from } : {}),
         });
       },

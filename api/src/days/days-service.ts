@@ -1,7 +1,8 @@
 import type * as z from 'zod';
 import type { DaysAnswer, DayVerdict, Parcel, routeCheck } from '@shared/contract';
 import { addDays } from '@shared/calendar/add-days';
-import { badInput } from '@shared/errors';
+import { AppError, badInput } from '@shared/errors';
+import { ThermalError, type ThermalErrorCode } from '@shared/thermal/thermal-error';
 import { contentsLimits } from '@shared/verdict/contents-limits';
 import { dayVerdict, stripDays } from '@shared/verdict/day-verdict';
 import type { RouteQuestion } from '@shared/verdict/day-question';
@@ -13,7 +14,10 @@ type RouteCheckBody = z.output<typeof routeCheck>;
 
 export interface DaysService {
   /** Fourteen days from `from` (default: today at the drop-off counter) for a stored parcel. */
-  forParcel(parcelId: number, options?: { from?: string; days?: number }): Promise<DaysAnswer>;
+  forParcel(
+    parcelId: number,
+    options?: { from?: string; days?: number; trace?: boolean },
+  ): Promise<DaysAnswer>;
   /** The verdicts of many parcels at once, forecasts fetched once: for pooling, blackouts and rechecks. */
   forParcels(
     parcelIds: readonly number[],
@@ -38,13 +42,12 @@ export function createDaysService(deps: Deps): DaysService {
   const answer = async (
     world: DayWorld,
     draft: RouteDraft,
-    from: string,
-    days: number,
+    { from, days, trace }: { from: string; days: number; trace: boolean },
   ): Promise<DaysAnswer> => {
     const [question] = await ask(world, [draft]);
     if (!question) throw new Error('One question, one answer.');
     const notches = await services.runs.notches(draft.dropOffCounterId, from, addDays(from, days - 1));
-    const strip = stripDays(question, from, days).map((day) => {
+    const strip = judged(() => stripDays(question, from, days, { trace })).map((day) => {
       const run = notches.find((one) => one.date === day.date);
       return run ? { ...day, run: { id: run.id, state: run.state, roomL: run.roomL } } : day;
     });
@@ -57,7 +60,10 @@ export function createDaysService(deps: Deps): DaysService {
     const drafts = await Promise.all(parcels.map((parcel) => draftOf(deps, parcel)));
     const questions = await ask(world, drafts);
     return new Map(
-      parcels.map((parcel, index) => [parcel.id, stripDays(questions[index] as RouteQuestion, from, days)]),
+      parcels.map((parcel, index) => [
+        parcel.id,
+        judged(() => stripDays(questions[index] as RouteQuestion, from, days)),
+      ]),
     );
   };
 
@@ -66,22 +72,42 @@ export function createDaysService(deps: Deps): DaysService {
       const parcel = await services.parcels.get(parcelId);
       const from = options.from ?? clock.today(parcel.dropOff.zone);
       const days = options.days ?? 14;
-      return answer(await readDayWorld(deps, from, days), await draftOf(deps, parcel), from, days);
+      const world = await readDayWorld(deps, from, days);
+      return answer(world, await draftOf(deps, parcel), { from, days, trace: options.trace ?? false });
     },
     forParcels,
     async forDate(parcelId, date, as) {
       const parcel = as ?? (await services.parcels.get(parcelId));
       const [question] = await ask(await readDayWorld(deps, date, 1), [await draftOf(deps, parcel)]);
       if (!question) throw new Error('One question, one answer.');
-      return dayVerdict({ ...question, shipDate: date });
+      return judged(() => dayVerdict({ ...question, shipDate: date }));
     },
     async routeCheck(actor, body) {
       const origin = await originOf(deps, actor, body);
       const from = body.from ?? clock.today(origin.zone);
       const draft = await checkDraft(deps, body, origin.id);
-      return answer(await readDayWorld(deps, from, body.days), draft, from, body.days);
+      const { days, trace } = body;
+      return answer(await readDayWorld(deps, from, days), draft, { from, days, trace });
     },
   };
+}
+
+const fieldOf: Readonly<Partial<Record<ThermalErrorCode, string>>> = {
+  'empty-band': 'contents',
+  'bad-mass': 'contents',
+  'bad-box': 'boxId',
+};
+
+/** Judges; what the box model cannot work with becomes a problem: 400 at its field, or 409 where no field is to blame. */
+function judged<T>(judge: () => T): T {
+  try {
+    return judge();
+  } catch (error) {
+    if (!(error instanceof ThermalError)) throw error;
+    const path = fieldOf[error.code];
+    if (path) throw badInput([{ path, message: error.message }]);
+    throw new AppError('conflict', `The days cannot be worked out: ${error.message}`);
+  }
 }
 
 /** What the strip shows beside its days. */

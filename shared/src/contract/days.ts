@@ -23,7 +23,33 @@ export type Reason = z.infer<typeof reason>;
 export const rangeF = z.object({ lowF: z.number(), highF: z.number() });
 export type RangeF = z.infer<typeof rangeF>;
 
-/** One day of the fourteen-day strip. `chance`, `lateChance` and `inBox` are null until a box model has spoken. */
+export const legKind = z.enum([
+  'packed',
+  'vehicle',
+  'drop-off',
+  'linehaul-out',
+  'hub',
+  'linehaul-in',
+  'station',
+  'held',
+  'truck',
+  'late',
+]);
+
+/** A point of the box trace. `tempF` with its ribbon is null past the planned end, `lateF` where there is no late case. */
+export const traceRow = z.object({
+  at: instant,
+  tempF: z.number().nullable(),
+  lowF: z.number().nullable(),
+  highF: z.number().nullable(),
+  lateF: z.number().nullable(),
+  leg: legKind,
+  place: z.string(),
+  zone: z.string(),
+});
+export type TraceRow = z.infer<typeof traceRow>;
+
+/** One day of the fourteen-day strip. `chance`, `lateChance` and `inBox` are null where the weather is not known. */
 export const dayVerdict = z.object({
   date: plainDate,
   verdict,
@@ -39,6 +65,8 @@ export const dayVerdict = z.object({
   leadDays: z.number().int(),
   /** Issue time of the oldest forecast used; null when there is none. */
   forecastAt: instant.nullable(),
+  /** The air in the box along the journey, when it was asked for. */
+  trace: z.array(traceRow).optional(),
   /** A run that already goes that day from the same counter, with the room left; null when there is none. */
   run: z.object({ id, state: z.string(), roomL: z.number() }).nullable().default(null),
 });
@@ -72,6 +100,7 @@ export const routeCheck = z.object({
   dropOffCounterId: id.optional(),
   from: plainDate.optional(),
   days: z.number().int().min(1).max(28).default(14),
+  trace: z.boolean().default(false),
 });
 export type RouteCheck = z.input<typeof routeCheck>;
 

@@ -55,6 +55,10 @@ const sentences: Readonly<Record<string, (v: Values) => string>> = {
     `The forecast for ${text(v, 'place')} is ${Math.round(number(v, 'hours'))} h old; only one of at most ${number(v, 'mostHours')} h can make a day open.`,
   'forecast-far': (v) =>
     `The forecast for ${text(v, 'place')} does not reach ${date(v, 'date')} yet. The calendar is checked, the weather is not.`,
+  box: (v) => boxText(v),
+  'box-late': (v) => lateText(v),
+  'late-unknown': () =>
+    'The forecast does not reach a day further, so nobody can say how a late parcel would fare.',
   pack: (v) => packText(text(v, 'pack'), v),
   'pack-short': (v) =>
     `A ${number(v, 'hours')}-hour heat pack is less than the ${Math.round(number(v, 'needHours'))} h planned with a day to spare${v['longer'] ? `; use the ${text(v, 'longer')}-hour one` : ''}.`,
@@ -64,10 +68,63 @@ const limitOf = (v: Values): string => (v['species'] ? ` for a ${text(v, 'specie
 const ahead = (v: Values): string =>
   number(v, 'leadDays') === 0 ? 'for today' : `${count(number(v, 'leadDays'), 'day')} ahead`;
 
+/** "at the sort hub in Indianapolis at 3 am Wednesday". */
+function boxWhere(v: Values): string {
+  const place = text(v, 'place');
+  const where: Readonly<Record<string, string>> = {
+    packed: 'at home',
+    vehicle: 'in the run vehicle',
+    'drop-off': 'at the drop-off counter',
+    'linehaul-out': 'on the way to the sort hub',
+    hub: `at the sort hub in ${place}`,
+    'linehaul-in': `on the way to ${place}`,
+    station: `at the station in ${place}`,
+    held: `at the counter in ${place}`,
+    truck: `in the delivery truck in ${place}`,
+    late: `while it rests in ${place}`,
+  };
+  return `${where[text(v, 'leg')] ?? `in ${place}`} at ${hour(v)}`;
+}
+
+/** "in 97 of 100 forecasts like this one". */
+function outOfHundred(v: Values): string {
+  const chance = number(v, 'chance');
+  if (chance > 0.995) return 'in more than 99 of 100 forecasts like this one';
+  if (chance < 0.005) return 'in fewer than 1 of 100 forecasts like this one';
+  return `in ${Math.round(chance * 100)} of 100 forecasts like this one`;
+}
+
+const keeps = (v: Values): string =>
+  `it keeps within ${degrees(v, 'lowF')} and ${degrees(v, 'highF')} ${outOfHundred(v)}`;
+const turns = (v: Values): string =>
+  `${text(v, 'side') === 'low' ? 'falls' : 'rises'} to ${degrees(v, 'tempF')}`;
+
+/** "2 °F under what a corn snake needs" or "4 °F above what …". */
+function against(v: Values, what: string): string {
+  const byF = number(v, 'byF');
+  const isLow = text(v, 'side') === 'low';
+  const beyond = isLow ? 'under' : 'over';
+  const inside = isLow ? 'above' : 'below';
+  return `${inTenths(Math.abs(byF))} °F ${byF < 0 ? beyond : inside} ${what}`;
+}
+
+const animal = (v: Values): string => (v['species'] ? `a ${text(v, 'species')}` : 'the animal');
+
+function boxText(v: Values): string {
+  return `In the box it ${turns(v)} ${boxWhere(v)}, ${against(v, `the limit of ${degrees(v, 'limitF')} for ${animal(v)}`)}; ${keeps(v)}.`;
+}
+
+function lateText(v: Values): string {
+  return `If it is a day late, the box ${turns(v)} ${boxWhere(v)}, ${against(v, `what ${animal(v)} may endure`)} (${degrees(v, 'limitF')}); ${keeps(v)}.`;
+}
+
 function packText(pack: string, v: Values): string {
-  if (pack === 'cold') return `Use a cold pack: it rises to ${degrees(v, 'highF')} along the route.`;
-  if (pack === 'none') return 'No heat or cold pack is needed by the rule of thumb.';
-  return `Use one ${pack === 'heat-72' ? 72 : 40}-hour heat pack, not touching the animal: the high along the route falls under ${degrees(v, 'belowF')}.`;
+  if (pack === 'cold')
+    return `Use a cold pack, not touching the animal: it rises to ${degrees(v, 'highF')} along the route.`;
+  if (pack !== 'none')
+    return `Use one ${pack === 'heat-72' ? 72 : 40}-hour heat pack, not touching the animal: the high along the route falls under ${degrees(v, 'belowF')}.`;
+  if (number(v, 'lowHighF') < number(v, 'belowF')) return 'No heat pack: the box keeps better without one.';
+  return 'No heat or cold pack is needed.';
 }
 
 /** The sentence of a reason. A code without one is a fault of ours and says its name, so that it is seen. */

@@ -25,7 +25,7 @@ export function demoWeather(nowMs: number): DemoWeather {
   const dayOfYear = (dayStartMs - Date.UTC(new Date(dayStartMs).getUTCFullYear(), 0, 1)) / dayMs;
   const seasonShiftDays = dayOfYear >= hotFrom && dayOfYear < hotTo ? played - dayOfYear : 0;
   let best = { seed: 1, kind: -1 };
-  for (let seed = 1; seed <= 300 && best.kind < 3; seed += 1) {
+  for (let seed = 1; seed <= 1500 && best.kind < 3; seed += 1) {
     const kind = kindDays(seed, seasonShiftDays * dayMs, dayStartMs);
     if (kind > best.kind) best = { seed, kind };
   }
@@ -42,7 +42,7 @@ function kindDays(seed: number, shiftMs: number, dayStartMs: number): number {
     if (![1, 2, 3, 4].includes(new Date(startMs).getUTCDay())) continue;
     const hours = Array.from({ length: 48 }, (_, hour) => startMs + hour * hourMs);
     const mild = hours.every(
-      (atMs) => here.trueF(atMs) > 42 && here.trueF(atMs) < 86 && there.trueF(atMs) > 15,
+      (atMs) => here.trueF(atMs) > 42 && here.trueF(atMs) < 80 && there.trueF(atMs) > 33,
     );
     if (mild) kind += 1;
   }

@@ -12,6 +12,8 @@ export interface ForecastFakeOptions {
   readonly now: () => number;
   /** Days by which the season runs ahead of the calendar; 0 by default. */
   readonly seasonShiftDays?: number;
+  /** Hours that the forecast reaches beyond the service's usual 7.5 to 8 days; 0 by default. */
+  readonly furtherHours?: number;
 }
 
 /** A request as the fake saw it. */
@@ -36,8 +38,13 @@ export interface ForecastFake {
 }
 
 /** A stand-in for the public weather service: the same protocol over a socket, invented weather, a script for tests. */
-export function createForecastFake({ seed, now, seasonShiftDays = 0 }: ForecastFakeOptions): ForecastFake {
-  const script = new ForecastScript(seasonShiftDays);
+export function createForecastFake({
+  seed,
+  now,
+  seasonShiftDays = 0,
+  furtherHours = 0,
+}: ForecastFakeOptions): ForecastFake {
+  const script = new ForecastScript(seasonShiftDays, furtherHours);
   const log: LoggedRequest[] = [];
   let open = 0;
   let most = 0;

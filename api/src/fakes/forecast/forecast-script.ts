@@ -65,6 +65,8 @@ export class ForecastScript {
   delayMs = 0;
   /** How far ahead in the year the weather's season is; outlives `reset`. */
   readonly seasonShiftMs: number;
+  /** Hours that the forecast reaches beyond the usual; outlives `reset`. */
+  readonly furtherHours: number;
   /** Rises with every change, so that the fake knows that an answer given before is not current any more. */
   revision = 0;
   private snaps: NonNullable<Change['coldSnap']>[] = [];
@@ -76,8 +78,9 @@ export class ForecastScript {
     only: undefined,
   };
 
-  constructor(seasonShiftDays = 0) {
+  constructor(seasonShiftDays = 0, furtherHours = 0) {
     this.seasonShiftMs = seasonShiftDays * 86_400_000;
+    this.furtherHours = furtherHours;
   }
 
   /** Takes over a change; throws a ZodError for one it does not know. */

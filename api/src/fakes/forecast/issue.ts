@@ -34,7 +34,7 @@ export function issuedF(
 export function issueFor(script: ForecastScript, seed: number, place: Position, nowMs: number): Issue {
   const { issuedMs, startMs, endMs } = issueTime(nowMs);
   const tempF = issuedF(script, seed, place);
-  const tempsF = Array.from({ length: (endMs - startMs) / hourMs }, (_, index) => {
+  const tempsF = Array.from({ length: (endMs - startMs) / hourMs + script.furtherHours }, (_, index) => {
     const atMs = startMs + index * hourMs;
     return script.isGap(place, atMs) ? null : Math.round(tempF(atMs, issuedMs));
   });
