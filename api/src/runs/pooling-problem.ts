@@ -103,7 +103,11 @@ function poolParcelOf(world: RunWorld, parcel: Parcel, verdicts: readonly DayVer
     parcel.shipDate !== null
       ? date === parcel.shipDate
       : parcel.flexible !== null && parcel.flexible.from <= date && date <= parcel.flexible.to;
-  const safe = verdicts.filter((day) => day.verdict === 'open' || day.verdict === 'tight');
+  // A tight day is the breeder's to accept in words; a run that counted on it could not be confirmed.
+  const needsWords = (day: DayVerdict) => day.verdict === 'tight' && parcel.acceptedTight === null;
+  const safe = verdicts.filter(
+    (day) => day.verdict === 'open' || (day.verdict === 'tight' && !needsWords(day)),
+  );
   const first = safe.find((day) => asked(day.date))?.date;
   return {
     id: parcel.id,
@@ -121,6 +125,7 @@ function poolParcelOf(world: RunWorld, parcel: Parcel, verdicts: readonly DayVer
       })),
     elsewhere: safe.filter((day) => !asked(day.date)).map((day) => day.date),
     unknownDates: verdicts.filter((day) => day.verdict === 'far' && asked(day.date)).map((day) => day.date),
+    tightDates: verdicts.filter((day) => needsWords(day) && asked(day.date)).map((day) => day.date),
     dayFixed: parcel.shipDate !== null,
   };
 }

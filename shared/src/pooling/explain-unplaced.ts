@@ -43,6 +43,11 @@ function whyNoDay(parcel: PoolParcel, pin: Pin | null): Why | null {
     return { reason: 'no-safe-day', text };
   }
   if (parcel.days.length > 0) return null;
+  const tight = parcel.tightDates ?? [];
+  if (tight.length > 0) {
+    const text = `Only tight days are left: ${dayNames(tight)}. The breeder has to accept one in words.`;
+    return { reason: 'no-safe-day', text };
+  }
   if (parcel.unknownDates.length > 0) {
     const text = `The weather is not known yet for ${dayNames(parcel.unknownDates)}.`;
     return { reason: 'weather-unknown', text };

@@ -24,6 +24,8 @@ export interface PoolParcel {
   readonly elsewhere: readonly string[];
   /** Days asked for whose weather nobody knows yet. */
   readonly unknownDates: readonly string[];
+  /** Days asked for that are tight and not accepted: nobody may count on them. */
+  readonly tightDates?: readonly string[];
   /** Booked on one day (true) or open for several (false). */
   readonly dayFixed: boolean;
 }
