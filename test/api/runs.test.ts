@@ -124,6 +124,15 @@ describe('POST /runs/proposals', () => {
     expect(unplaced[0]?.help).toContain('more room with Cora Coordinator');
   });
 
+  it('counts on no tight day that the breeder has not accepted, and says so', async () => {
+    await site.seeking(breeder, thursday, thursday);
+    const { runs, unplaced } = await site.propose();
+    expect(runs).toEqual([]);
+    expect(unplaced[0]?.text).toBe(
+      'Only tight days are left: Thu, Dec 3. The breeder has to accept one in words.',
+    );
+  });
+
   it('has no run on a day that the coordinator does not drive, and says that a driver is missing', async () => {
     const parcel = await site.booked(breeder, wednesday, { readyFrom: wednesday, latestDate: wednesday });
     const free = { daysAway: [], drivingDays: [{ date: wednesday, free: false }] };

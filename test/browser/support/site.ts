@@ -57,7 +57,7 @@ export const test = base.extend<object, { site: Site }>({
     async ({}, use) => {
       const running = await startSite();
       await use(running.site);
-      running.stop();
+      await running.stop();
     },
     { scope: 'worker', timeout: 180_000 },
   ],
@@ -69,7 +69,7 @@ export const test = base.extend<object, { site: Site }>({
 });
 export { expect } from '@playwright/test';
 
-async function startSite(): Promise<{ site: Site; stop: () => void }> {
+async function startSite(): Promise<{ site: Site; stop: () => Promise<void> }> {
   const folder = mkdtempSync(join(tmpdir(), 'dayberth-site-'));
   const port = await freePort();
   const child = spawn(process.execPath, ['node_modules/tsx/dist/cli.mjs', 'tools/start.ts'], {
@@ -98,10 +98,14 @@ async function startSite(): Promise<{ site: Site; stop: () => void }> {
       mailbox: new Mailbox(word(/mailbox is at (\S+)/)),
       forecastUrl: word(/forecasts come from (\S+)/),
     },
-    stop: () => {
-      child.once('exit', () => rmSync(folder, { recursive: true, force: true }));
-      child.kill('SIGTERM');
-    },
+    stop: () =>
+      new Promise((done) => {
+        child.once('exit', () => {
+          rmSync(folder, { recursive: true, force: true });
+          done();
+        });
+        child.kill('SIGTERM');
+      }),
   };
 }
 
