@@ -1,9 +1,11 @@
 import type { BenchLine } from './bench-line';
 import { routeCheck } from './route-check';
+import { verdicts } from './verdicts';
 
 /** Every bench by its name; later ones join here. */
 const benches: Readonly<Record<string, () => Promise<BenchLine[]>>> = {
   'route-check': routeCheck,
+  verdicts,
 };
 
 /** `npm run bench [-- name …]`: prints one JSON object a line and nothing else on stdout. */

@@ -8,13 +8,31 @@ const text = (values: Values, key: string): string => String(values[key] ?? '');
 const number = (values: Values, key: string): number => Number(values[key] ?? 0);
 const degrees = (values: Values, key: string): string => `${Math.round(number(values, key))} °F`;
 const inTenths = (value: number): string => String(Math.round(value * 10) / 10);
+// Formatting a date costs more than judging the day, and a strip says the same few dates and hours over and over. The words follow
+// from the key alone, so remembering them changes nothing but the time it takes; the size is bounded.
+const said = new Map<string, string>();
+const mostSaid = 5000;
+
+function remembered(key: string, make: () => string): string {
+  const known = said.get(key);
+  if (known !== undefined) return known;
+  const made = make();
+  if (said.size >= mostSaid) said.clear();
+  said.set(key, made);
+  return made;
+}
+
 const date = (values: Values, key: string): string =>
-  DateTime.fromISO(text(values, key), { zone: 'utc' }).toFormat('cccc, LLLL d', { locale: 'en-US' });
+  remembered(text(values, key), () =>
+    DateTime.fromISO(text(values, key), { zone: 'utc' }).toFormat('cccc, LLLL d', { locale: 'en-US' }),
+  );
 /** "5 am Wednesday", on the clock of the place. */
 const hour = (values: Values): string =>
-  DateTime.fromISO(text(values, 'at'), { zone: text(values, 'zone') })
-    .toFormat('h a cccc', { locale: 'en-US' })
-    .replace(/ (AM|PM) /, (_, half: string) => ` ${half.toLowerCase()} `);
+  remembered(`${text(values, 'at')} ${text(values, 'zone')}`, () =>
+    DateTime.fromISO(text(values, 'at'), { zone: text(values, 'zone') })
+      .toFormat('h a cccc', { locale: 'en-US' })
+      .replace(/ (AM|PM) /, (_, half: string) => ` ${half.toLowerCase()} `),
+  );
 const count = (n: number, one: string): string => `${n} ${one}${n === 1 ? '' : 's'}`;
 
 const sentences: Readonly<Record<string, (v: Values) => string>> = {
