@@ -8,6 +8,7 @@ import { daysRoutes } from './days/days-routes';
 import { parcelsRoutes } from './parcels/parcels-routes';
 import { peopleRoutes } from './people/people-routes';
 import { placesRoutes } from './places/places-routes';
+import { policyRoutes } from './policy/policy-routes';
 import { runRoutes } from './runs/runs-routes';
 import { sessionRoutes } from './session/session-routes';
 
@@ -24,5 +25,6 @@ export function allRoutes(deps: Deps): readonly AnyRoute[] {
     ...blackoutsRoutes(deps),
     ...deskRoutes(deps),
     ...calendarsRoutes(deps),
+    ...policyRoutes(deps),
   ];
 }

@@ -1,6 +1,7 @@
 import request from 'supertest';
 import type { FieldError } from '@shared/contract';
 import { allRoutes } from '@api/features';
+import { defaultPolicy } from '@shared/policy/policy';
 import { createAccessWorld, type AccessWorld } from '../support/access-world';
 import { createTestSite, type Caller, type TestSite } from '../support/test-site';
 
@@ -13,6 +14,7 @@ const breeder = 'breeder@example.org';
 const fitBodies: Readonly<Record<string, object>> = {
   'put /parcels/:id/booking': { flexible: { from: '2026-12-07', to: '2026-12-18' } },
   'post /runs/:id/call-off': { reason: 'Ice on the roads.' },
+  'put /policy': defaultPolicy,
 };
 
 /** For each route that takes a body: what is sent, and the paths that are complained of. */
@@ -96,6 +98,10 @@ const wrongBodies: Readonly<Record<string, readonly [unknown, readonly string[]]
   'post /route-checks': [{}, ['boxId', 'contents', 'destination', 'service']],
   'post /blackouts': [{}, ['kind', 'scope', 'title']],
   'post /blackouts/preview': [{}, ['blackout']],
+  'put /policy': [
+    { ...defaultPolicy, circleName: '', chance: { ...defaultPolicy.chance, open: 2 }, sigmaF: [3], extra: 1 },
+    ['chance.open', 'circleName', 'extra', 'sigmaF'],
+  ],
   'patch /blackouts/:id': [
     { startDate: '2026-02-30', liftedDates: ['never'] },
     ['liftedDates.0', 'startDate'],
@@ -114,6 +120,7 @@ const versioned: Readonly<Record<string, string>> = {
   'delete /parcels/:id/booking': breeder,
   'patch /blackouts/:id': admin,
   'delete /blackouts/:id': admin,
+  'put /policy': admin,
   'patch /runs/:id': coordinator,
   'post /runs/:id/confirmation': coordinator,
   'post /runs/:id/departure': coordinator,

@@ -12,6 +12,7 @@ export interface AccessWorld {
   readonly accountLink: string;
   readonly arrival: string;
   readonly calendar: string;
+  readonly policyVersion: string;
 }
 
 /** One of everything: two parcels of Bea's for Bo, a confirmed run with the first, a blackout, a failed mail, links. */
@@ -55,6 +56,7 @@ export async function createAccessWorld(site: TestSite): Promise<AccessWorld> {
     created_at: now,
   });
   await db('proposals').insert({ created_at: now, result: JSON.stringify(emptyProposal(now)) });
+  const [policy] = await db('policies').insert({ values: '{}', created_at: now });
   const link = await makeLink(deps, ids.otherBuyer, 'reset');
   const feed = await deps.services.calendars.feedOf(ids.breeder);
   return {
@@ -64,6 +66,7 @@ export async function createAccessWorld(site: TestSite): Promise<AccessWorld> {
     blackout: `/blackouts/${blackout}`,
     failedMail: `/desk/mail/${mail}`,
     accountLink: `/account-links/${link.url.split('/').at(-1)}`,
+    policyVersion: `/policy/versions/${policy}`,
     arrival: '/arrivals/arrival-token-of-TD-1',
     calendar: new URL(feed.url).pathname.replace(/^\/api/, ''),
   };

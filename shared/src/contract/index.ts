@@ -10,3 +10,4 @@ export * from './blackouts';
 export * from './arrivals';
 export * from './calendars';
 export * from './desk';
+export * from './policy';
