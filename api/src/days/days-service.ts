@@ -116,12 +116,13 @@ function about(
   strip: readonly DayVerdict[],
   nowMs: number,
 ): Omit<DaysAnswer, 'days'> {
-  const { bandLowF, bandHighF } = contentsLimits(question.contents);
+  const { bandLowF, bandHighF, enduranceLowF, enduranceHighF } = contentsLimits(question.contents);
   const { destination, origin, hub } = question;
   const end = destination.kind === 'hold' ? destination.counter : destination.door;
   const issued = strip.flatMap((day) => (day.forecastAt === null ? [] : [Date.parse(day.forecastAt)]));
   return {
     band: { lowF: bandLowF, highF: bandHighF },
+    endurance: { lowF: enduranceLowF, highF: enduranceHighF },
     route: {
       origin: origin.name,
       hub: hub.name,

@@ -108,6 +108,8 @@ export type RouteCheck = z.input<typeof routeCheck>;
 export const daysAnswer = z.object({
   days: z.array(dayVerdict),
   band: rangeF.nullable(),
+  /** The wider limits that the contents may meet once, for the late case. */
+  endurance: rangeF.optional(),
   route: z.object({
     origin: z.string(),
     hub: z.string(),

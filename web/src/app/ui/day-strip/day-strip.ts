@@ -17,6 +17,7 @@ import { MatTooltip } from '@angular/material/tooltip';
 import type { DayVerdict, RangeF, TemperatureUnit } from '@shared/contract';
 import { dayLabel } from '../../core/dates';
 import { rangeText } from '../../core/temperature';
+import { chanceNumber } from '../chance-text';
 import { VerdictGlyph } from '../verdict-glyph/verdict-glyph';
 import { rowGeometry, stripGeometry, wrapWords } from './strip-geometry';
 import { dayName, dayNumbers, roomText, shortWhy } from './strip-words';
@@ -65,6 +66,7 @@ export class DayStrip {
   });
   /** Nobody has worked out the inside of the box yet: no bar, no column, no word of it. */
   protected readonly hasInBox = computed(() => this.days().some((day) => day.inBox !== null));
+  protected readonly hasChance = computed(() => this.days().some((day) => day.chance !== null));
   protected readonly items = computed(() => this.days().map((day, index) => this.itemOf(day, index)));
   /** The one day that Tab reaches: where the arrows went, else the chosen one, else the first that can be booked. */
   protected readonly tabStop = computed(() => {
@@ -126,6 +128,7 @@ export class DayStrip {
       /** On a phone both stand in one line. */
       beside: [why, day.run ? `run, ${roomText(day)}` : ''].filter(Boolean).join('; '),
       outdoor: day.outdoor && day.verdict !== 'far' ? rangeText(day.outdoor, this.unit()) : '–',
+      chance: day.chance !== null && day.verdict !== 'far' ? chanceNumber(day.chance) : '',
       inBox: day.inBox ? rangeText(day.inBox, this.unit()) : '–',
     };
   }

@@ -64,7 +64,7 @@ export function stripScale(
 
 /**
  * Lines of the scale as °F with their labels: the band's two edges first, then round steps that keep clear of them
- * (by a twelfth of the scale), so that no two labels meet.
+ * (by a ninth of the scale), so that no two labels meet.
  */
 export function stripTicks(
   scale: RangeF,
@@ -77,7 +77,7 @@ export function stripTicks(
   const edges = band ? [band.lowF, band.highF] : [];
   const [low, high] = [toUnit(scale.lowF), toUnit(scale.highF)];
   const step = [5, 10, 20, 40].find((size) => (high - low) / size <= 6) ?? 50;
-  const clear = (scale.highF - scale.lowF) / 12;
+  const clear = (scale.highF - scale.lowF) / 9;
   const round: number[] = [];
   for (let value = Math.ceil(low / step) * step; value <= high; value += step) round.push(toF(value));
   return [

@@ -1,6 +1,7 @@
 import type { DayVerdict, Reason, TemperatureUnit } from '@shared/contract';
 import { dayLabel } from '../../core/dates';
 import { rangeText } from '../../core/temperature';
+import { chanceText } from '../chance-text';
 
 /** Two or three words for a reason's code, for the foot of a column; what is not listed shows no words there. */
 const short: Readonly<Record<string, string>> = {
@@ -25,7 +26,15 @@ const short: Readonly<Record<string, string>> = {
   'no-forecast': 'no forecast',
   'forecast-old': 'old forecast',
   'pack-short': 'pack too short',
+  'late-unknown': 'late case unknown',
 };
+
+/** The two looks into the box say which side is short of room. */
+function shortOf({ code, values }: Reason): string | undefined {
+  if (code === 'box') return values['side'] === 'low' ? 'cold in the box' : 'hot in the box';
+  if (code === 'box-late') return values['side'] === 'low' ? 'cold when late' : 'hot when late';
+  return short[code];
+}
 
 /** The reason that decided a verdict: the first of its own class. */
 export const decidingReason = (day: DayVerdict): Reason | null =>
@@ -35,7 +44,7 @@ export const decidingReason = (day: DayVerdict): Reason | null =>
 export function shortWhy(day: DayVerdict): string {
   if (day.verdict === 'open') return '';
   const own = day.reasons.filter((reason) => reason.verdict === day.verdict);
-  return own.map((reason) => short[reason.code]).find((words) => words !== undefined) ?? '';
+  return own.map(shortOf).find((words) => words !== undefined) ?? '';
 }
 
 /** What is left in the run that goes that day: `18 L left`, `full`, or empty without a run. */
@@ -50,6 +59,7 @@ export function dayNumbers(day: DayVerdict, unit: TemperatureUnit): string {
   const parts = [
     day.outdoor && day.verdict !== 'far' ? `Outdoors ${rangeText(day.outdoor, unit)}.` : '',
     day.inBox && day.verdict !== 'far' ? `In the box ${rangeText(day.inBox, unit)}.` : '',
+    day.chance !== null && day.verdict !== 'far' ? `Safe ${chanceText(day.chance)}.` : '',
     shortWhy(day) ? `${capital(shortWhy(day))}.` : '',
     day.run ? `A run goes, ${roomText(day)}.` : '',
   ];
