@@ -32,6 +32,13 @@ export class ParcelsApi {
     return this.http.get<DaysAnswer>(`/api/parcels/${id}/days`);
   }
 
+  /** One day with its box trace. */
+  trace(id: number, date: string): Observable<DaysAnswer> {
+    return this.http.get<DaysAnswer>(`/api/parcels/${id}/days`, {
+      params: { from: date, days: 1, trace: 1 },
+    });
+  }
+
   history(id: number): Observable<HistoryEntry[]> {
     return this.http.get<HistoryEntry[]>(`/api/parcels/${id}/history`);
   }

@@ -24,6 +24,7 @@ import { PlanningAid } from '../../ui/planning-aid/planning-aid';
 import { ProblemNote } from '../../ui/problem-note/problem-note';
 import { revealOnPhone } from '../../ui/reveal-on-phone';
 import type { ParcelSteps } from '../parcel-steps';
+import { ParcelTrace } from '../parcel-trace/parcel-trace';
 import { dayOffer } from './day-offer';
 
 export interface DayBooking {
@@ -48,6 +49,7 @@ const fewestWords = 10;
     MatFormFieldModule,
     MatInput,
     NextAction,
+    ParcelTrace,
     PlanningAid,
     ProblemNote,
     ReactiveFormsModule,

@@ -28,10 +28,12 @@ import { applyProblem, toProblem } from '../../core/http/problem';
 import { answersFromQuery, answersToQuery } from '../../core/route-answers';
 import { SessionStore } from '../../core/session/session-store';
 import { UnitPreference } from '../../core/unit-preference';
+import { errorText } from '../../ui/call-state';
 import { CircleLists } from '../../ui/circle-lists';
 import { ContentsRows } from '../../ui/contents-rows/contents-rows';
 import { CopyButton } from '../../ui/copy-button/copy-button';
 import { DayReasons } from '../../ui/day-reasons/day-reasons';
+import { TraceSheet } from '../../ui/box-trace/trace-sheet';
 import { bestDay } from '../../ui/day-strip/best-day';
 import { DayStrip } from '../../ui/day-strip/day-strip';
 import { EmptyState } from '../../ui/empty-state/empty-state';
@@ -72,6 +74,7 @@ const settleMs = 250;
     ProblemNote,
     ReactiveFormsModule,
     RouterLink,
+    TraceSheet,
   ],
   providers: [CircleLists],
   templateUrl: './route-check-page.html',
@@ -110,6 +113,17 @@ export class RouteCheckPage {
   protected readonly day = computed(
     () => this.answer()?.days.find((one) => one.date === this.chosen()) ?? null,
   );
+  /** The trace of the day in view, asked for once there is an answer to the same question. */
+  protected readonly trace = rxResource({
+    params: () => {
+      const [question, day] = [this.question(), this.day()];
+      if (!question || !day?.inBox || day.verdict === 'far' || this.check.isLoading()) return undefined;
+      return { ...question, from: day.date, days: 1, trace: true };
+    },
+    stream: ({ params }) => this.api.ask(params),
+  });
+  protected readonly traced = computed(() => (this.trace.hasValue() ? this.trace.value() : null));
+  protected readonly traceProblem = computed(() => errorText(this.trace.error()));
   protected readonly counts = computed(() => countText(this.answer()?.days ?? []));
   protected readonly message = signal<string | null>(null);
   private readonly reasons = viewChild<ElementRef<HTMLElement>>('reasons');

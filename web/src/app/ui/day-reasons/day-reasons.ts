@@ -2,6 +2,7 @@ import { ChangeDetectionStrategy, Component, computed, input } from '@angular/co
 import type { DayVerdict, TemperatureUnit } from '@shared/contract';
 import { ageText, clock, dateAt, dayLabel } from '../../core/dates';
 import { sentenceInUnit } from '../../core/temperature';
+import { chanceText } from '../chance-text';
 import { VerdictChip } from '../verdict-chip/verdict-chip';
 import { VerdictGlyph } from '../verdict-glyph/verdict-glyph';
 import { emphasis } from './emphasis';
@@ -17,6 +18,9 @@ import { emphasis } from './emphasis';
         <span>{{ text }}</span>
       }
     </p>
+    @if (chance(); as text) {
+      <p class="chance">{{ text }}</p>
+    }
     <ul>
       @for (reason of reasons(); track $index) {
         <li [attr.data-verdict]="reason.verdict">
@@ -47,6 +51,15 @@ export class DayReasons {
     const { verdict, arrival } = this.day();
     if (verdict === 'shut') return null;
     return `ready ${dayLabel(dateAt(arrival.at, arrival.zone), 'weekday')} at ${clock(arrival.at, arrival.zone)}, ${arrival.place}`;
+  });
+  /** How sure it is, as planned and a day late. */
+  protected readonly chance = computed(() => {
+    const { verdict, chance, lateChance } = this.day();
+    if (chance === null) return null;
+    const late = lateChance === null ? '' : ` If it comes a day late: endured ${chanceText(lateChance)}.`;
+    // A shut day is not safe, however well the box would do.
+    const head = verdict === 'shut' ? 'By the box alone: in its band' : 'Safe';
+    return `${head} ${chanceText(chance)}.${late}`;
   });
   protected readonly reasons = computed(() =>
     this.day().reasons.map(({ verdict, text }) => ({

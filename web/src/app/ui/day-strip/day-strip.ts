@@ -20,7 +20,7 @@ import { rangeText } from '../../core/temperature';
 import { chanceNumber } from '../chance-text';
 import { VerdictGlyph } from '../verdict-glyph/verdict-glyph';
 import { rowGeometry, stripGeometry, wrapWords } from './strip-geometry';
-import { dayName, dayNumbers, roomText, shortWhy } from './strip-words';
+import { dayName, dayNumbers, isOffered, roomText, shortWhy } from './strip-words';
 
 /** Under this many pixels the strip turns: days run down, temperature runs across. */
 const narrowBelow = 680;
@@ -66,7 +66,9 @@ export class DayStrip {
   });
   /** Nobody has worked out the inside of the box yet: no bar, no column, no word of it. */
   protected readonly hasInBox = computed(() => this.days().some((day) => day.inBox !== null));
-  protected readonly hasChance = computed(() => this.days().some((day) => day.chance !== null));
+  protected readonly hasChance = computed(() =>
+    this.days().some((day) => day.chance !== null && isOffered(day)),
+  );
   protected readonly items = computed(() => this.days().map((day, index) => this.itemOf(day, index)));
   /** The one day that Tab reaches: where the arrows went, else the chosen one, else the first that can be booked. */
   protected readonly tabStop = computed(() => {
@@ -128,7 +130,7 @@ export class DayStrip {
       /** On a phone both stand in one line. */
       beside: [why, day.run ? `run, ${roomText(day)}` : ''].filter(Boolean).join('; '),
       outdoor: day.outdoor && day.verdict !== 'far' ? rangeText(day.outdoor, this.unit()) : '–',
-      chance: day.chance !== null && day.verdict !== 'far' ? chanceNumber(day.chance) : '',
+      chance: day.chance !== null && isOffered(day) ? chanceNumber(day.chance) : '',
       inBox: day.inBox ? rangeText(day.inBox, this.unit()) : '–',
     };
   }

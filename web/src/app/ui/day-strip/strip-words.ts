@@ -59,12 +59,15 @@ export function dayNumbers(day: DayVerdict, unit: TemperatureUnit): string {
   const parts = [
     day.outdoor && day.verdict !== 'far' ? `Outdoors ${rangeText(day.outdoor, unit)}.` : '',
     day.inBox && day.verdict !== 'far' ? `In the box ${rangeText(day.inBox, unit)}.` : '',
-    day.chance !== null && day.verdict !== 'far' ? `Safe ${chanceText(day.chance)}.` : '',
+    day.chance !== null && isOffered(day) ? `Safe ${chanceText(day.chance)}.` : '',
     shortWhy(day) ? `${capital(shortWhy(day))}.` : '',
     day.run ? `A run goes, ${roomText(day)}.` : '',
   ];
   return parts.filter(Boolean).join(' ') || 'No forecast for this day yet.';
 }
+
+/** Whether a day can be booked on its weather; of others no chance is told beside the verdict. */
+export const isOffered = ({ verdict }: DayVerdict): boolean => verdict === 'open' || verdict === 'tight';
 
 /** `Tuesday, December 8: open`. */
 export const dayName = (day: DayVerdict): string => `${dayLabel(day.date)}: ${day.verdict}`;
