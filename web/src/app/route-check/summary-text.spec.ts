@@ -53,6 +53,19 @@ describe('the text for the buyer', () => {
     expect(text).toContain('The other 1 of the 5 days are not offered.');
   });
 
+  it('names the pack and the chance of the first day that is offered', () => {
+    const sure = { ...day('2026-12-08', 'open'), pack: 'heat-40' as const, chance: 0.971 };
+    const head = { contents: '1 corn snake', service: 'hold' } as const;
+    const early = { ...day('2026-12-07', 'tight'), chance: 0.85 };
+    const line =
+      'On Tue, Dec 8 it travels with a 40-hour heat pack: safe in 97 of 100 forecasts like this one.';
+    expect(summaryText({ route, days: [early, sure] }, head)).toContain(line);
+    expect(summaryText({ route, days: [early] }, head)).toContain(
+      'On Mon, Dec 7 it travels with no pack: safe in 85 of 100',
+    );
+    expect(text).not.toContain('travels with');
+  });
+
   it('leaves the last word to others', () => {
     expect(text).toContain("carrier's terms, local law and a veterinarian come first");
   });

@@ -1,5 +1,6 @@
 import type { DaysAnswer, DayVerdict, Verdict } from '@shared/contract';
 import { dayLabel } from '../core/dates';
+import { chanceText } from '../ui/chance-text';
 
 /** What the summary is about, in words: `1 corn snake, held for pickup`. */
 export interface SummaryHead {
@@ -23,6 +24,7 @@ export function summaryText(answer: Pick<DaysAnswer, 'days' | 'route'>, head: Su
     line(days, 'tight', 'Tight days (little room)'),
     line(days, 'far', 'Too far off for a forecast yet'),
     shutLine(days),
+    firstDayLine(days),
     "By today's forecast; it can change. The carrier's terms, local law and a veterinarian come first.",
   ];
   return lines.filter((text) => text !== '').join('\n');
@@ -51,6 +53,20 @@ function line(days: readonly DayVerdict[], verdict: Verdict, words: string): str
   return found.length === 0
     ? ''
     : `${words}: ${found.map((day) => dayLabel(day.date, 'medium')).join('; ')}.`;
+}
+
+const packWords: Readonly<Record<DayVerdict['pack'], string>> = {
+  none: 'no pack',
+  'heat-40': 'a 40-hour heat pack',
+  'heat-72': 'a 72-hour heat pack',
+  cold: 'a cold pack',
+};
+
+/** What goes into the box on the first day that is offered, and how sure that day is. */
+function firstDayLine(days: readonly DayVerdict[]): string {
+  const day = of(days, 'open')[0] ?? of(days, 'tight')[0];
+  if (!day || day.chance === null) return '';
+  return `On ${dayLabel(day.date, 'medium')} it travels with ${packWords[day.pack]}: safe ${chanceText(day.chance)}.`;
 }
 
 function shutLine(days: readonly DayVerdict[]): string {
