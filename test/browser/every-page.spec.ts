@@ -45,6 +45,8 @@ const pagesOf: Record<string, (page: Page) => Promise<string[]>> = {
       '/runs',
       `/runs/${runs[0]?.id}`,
       '/blackouts',
+      '/policy',
+      '/how',
       '/account',
     ];
   },
@@ -57,11 +59,12 @@ const pagesOf: Record<string, (page: Page) => Promise<string[]>> = {
     '/counters',
     '/species',
     '/boxes',
+    '/policy',
     '/account',
   ],
   'buyer@example.org': async (page) => {
     const arrivals = (await (await page.request.get('/api/arrivals')).json()) as { token: string }[];
-    return ['/my-arrivals', ...arrivals.map(({ token }) => `/arrival/${token}`), '/account'];
+    return ['/my-arrivals', ...arrivals.map(({ token }) => `/arrival/${token}`), '/how', '/account'];
   },
   'admin@example.org': async (page) => [
     '/desk',
@@ -73,6 +76,7 @@ const pagesOf: Record<string, (page: Page) => Promise<string[]>> = {
     '/species/new',
     '/boxes',
     '/boxes/new',
+    '/policy',
     '/people',
     '/people/new',
     `/people/${(await list(page, '/api/people'))[0]?.id}`,

@@ -24,10 +24,13 @@ export const policyChange: z.ZodType<Policy, Policy> = (
 
 function strict(schema: z.ZodType, path: string): z.ZodType {
   if (schema instanceof z.ZodObject) {
-    const shape = Object.entries(schema.shape as Record<string, z.ZodType>);
+    const shape: Readonly<Record<string, z.ZodType>> = schema.shape;
     return z.strictObject(
       Object.fromEntries(
-        shape.map(([key, member]) => [key, strict(member, path === '' ? key : `${path}.${key}`)]),
+        Object.entries(shape).map(([key, member]) => [
+          key,
+          strict(member, path === '' ? key : `${path}.${key}`),
+        ]),
       ),
     );
   }

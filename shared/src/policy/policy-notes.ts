@@ -151,7 +151,12 @@ export const policyNotes: Readonly<Record<string, PolicyNote>> = {
     null,
     'Names of the National Weather Service, one a line; capitals do not matter.',
   ),
-  packedBeforeCutOffMinutes: assumed('Ready to pack before the cut-off', 'minutes', [0, 1440]),
+  packedBeforeCutOffMinutes: assumed(
+    'Collected before the cut-off',
+    'minutes',
+    [0, 1440],
+    'Until a run says when.',
+  ),
   horizonDays: assumed('Days ahead that can be asked for', 'days', [1, 365]),
   'journey.packedBeforeCollectionMinutes': assumed('Packed before collection', 'minutes', [0, 720]),
   ...surroundings('journey.packed', 'Packed at home'),

@@ -51,6 +51,12 @@ export const routes: Routes = [
         canActivate: [sessionGuard('admin')],
         loadChildren: () => import('./people/people.routes').then((m) => m.routes),
       },
+      {
+        path: 'policy',
+        canActivate: [sessionGuard('admin', 'coordinator', 'breeder')],
+        loadChildren: () => import('./policy/policy.routes').then((m) => m.routes),
+      },
+      { path: 'how', loadChildren: () => import('./how/how.routes').then((m) => m.routes) },
       { path: 'account', loadChildren: () => import('./account/account.routes').then((m) => m.routes) },
     ],
   },

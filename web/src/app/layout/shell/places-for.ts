@@ -16,6 +16,7 @@ const places: readonly (NavPlace & { readonly roles: readonly Role[] })[] = [
   { path: '/counters', label: 'Counters', icon: 'counter', roles: ['coordinator', 'admin'] },
   { path: '/species', label: 'Species', icon: 'species', roles: ['coordinator', 'admin'] },
   { path: '/boxes', label: 'Boxes', icon: 'box', roles: ['coordinator', 'admin'] },
+  { path: '/policy', label: 'Policy', icon: 'thermometer', roles: ['coordinator', 'admin'] },
   { path: '/people', label: 'People', icon: 'people', roles: ['admin'] },
 ];
 

@@ -3,6 +3,7 @@ import { ChangeDetectionStrategy, Component, signal } from '@angular/core';
 import { TestBed } from '@angular/core/testing';
 import { MatButtonHarness } from '@angular/material/button/testing';
 import { MatInputHarness } from '@angular/material/input/testing';
+import { provideRouter } from '@angular/router';
 import { Settings } from 'luxon';
 import type { DaysAnswer, Parcel } from '@shared/contract';
 import { DayStripHarness } from '../../ui/day-strip/day-strip-harness';
@@ -66,6 +67,7 @@ describe('choosing a day', () => {
   beforeEach(() => {
     Settings.defaultLocale = 'en-US';
     Settings.now = () => Date.UTC(2026, 11, 1, 12);
+    TestBed.configureTestingModule({ providers: [provideRouter([])] });
     fixture = TestBed.createComponent(Page);
     page = fixture.componentInstance;
   });
