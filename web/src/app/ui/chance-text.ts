@@ -7,8 +7,4 @@ export function chanceText(chance: number): string {
 
 /** The same for a table's cell or a column's foot: `97 of 100`. */
 export const chanceNumber = (chance: number): string =>
-  chance > 0.995
-    ? 'over 99 of 100'
-    : chance < 0.005
-      ? 'under 1 of 100'
-      : `${Math.round(chance * 100)} of 100`;
+  chance > 0.995 ? '99+ of 100' : chance < 0.005 ? '<1 of 100' : `${Math.round(chance * 100)} of 100`;
