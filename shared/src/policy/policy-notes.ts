@@ -108,7 +108,7 @@ const temperature = (label: string, remark?: string): PolicyNote =>
   assumed(label, 'temperature', [-40, 130], remark);
 /** The two values of a leg's surroundings, under its path. */
 const surroundings = (path: string, where: string): Record<string, PolicyNote> => ({
-  [`${path}.exposure`]: assumed(`${where}: part of the outdoor air`, 'share', [0, 1]),
+  [`${path}.exposure`]: assumed(`${where}: outdoor part`, 'share', [0, 1]),
   [`${path}.indoorF`]: assumed(`${where}: air indoors`, 'temperature', [0, 120]),
 });
 const rail = (path: string, where: string, remark?: string): Record<string, PolicyNote> => ({
@@ -140,7 +140,7 @@ export const policyNotes: Readonly<Record<string, PolicyNote>> = {
   ...rail('guardRails.door', 'To the door', fromMemory),
   ...rail('hubRail', 'Sort hub overnight', 'The box is mostly indoors there.'),
   fastDays: assumed('Not fed before travelling', 'days', [0, 30], practice),
-  forecastMaxAgeHours: assumed('A forecast older than this is never open', 'hours', [1, 72]),
+  forecastMaxAgeHours: assumed('Forecast no older than, to be open', 'hours', [1, 72]),
   ...Object.fromEntries(Array.from({ length: 8 }, (_, day) => [`sigmaF.${day}`, errorOfDay(day)])),
   heatPackBelowF: temperature('Heat pack when a high is under', practice),
   coldPackAboveF: temperature('Cold pack when a high is over', fromMemory),
@@ -175,10 +175,10 @@ export const policyNotes: Readonly<Record<string, PolicyNote>> = {
   'journey.truckUntilMinute': assumed('To the door: in the truck until', 'clock', [1, 1439]),
   ...surroundings('journey.truck', 'Delivery truck'),
   'journey.truck.cabinF': assumed('Delivery truck: heat of the cabin', 'difference', [0, 60]),
-  'journey.truck.cabinAboveF': temperature('Delivery truck: cabin heats while outdoors over'),
+  'journey.truck.cabinAboveF': temperature('Truck: cabin heats when outdoors over'),
   'journey.late.hours': assumed('A late box waits', 'hours', [1, 72]),
   ...surroundings('journey.late.hub', 'Late at the sort hub'),
-  ...surroundings('journey.late.station', 'Late at the destination’s station'),
+  ...surroundings('journey.late.station', 'Late at the station'),
   'boxModel.foamWPerMK': sourced(
     'Foam: conductivity',
     'W/m·K',
@@ -214,7 +214,7 @@ export const policyNotes: Readonly<Record<string, PolicyNote>> = {
     '3.2 W for 40 h is the heat of about 62 g of iron, at 7.4 kJ a gram.',
   ),
   'heatPack.riseHours': assumed('Heat pack: hours to full power', 'hours', [0.05, 12]),
-  'heatPack.tailShare': assumed('Heat pack: fades over this part of its hours', 'share', [0, 1]),
+  'heatPack.tailShare': assumed('Heat pack: fades over a further', 'share', [0, 1]),
   'coldPack.wPerK': assumed('Cold pack: takes up', 'W/K', [0.001, 2]),
   'coldPack.massKg': assumed('Cold pack: mass', 'kg', [0.01, 5]),
   'coldPack.latentKJPerKg': assumed(
