@@ -9,7 +9,8 @@ import type {
 } from '@shared/contract';
 import { addDays } from '@shared/calendar/add-days';
 import { blackoutDates } from '@shared/calendar/blackout-dates';
-import { notFound } from '@shared/errors';
+import { daysBetween } from '@shared/calendar/days-between';
+import { badInput, notFound } from '@shared/errors';
 import type { Deps } from '../deps';
 import type { Actor } from '../http/actor';
 import { checkVersion } from '../http/router';
@@ -26,7 +27,7 @@ import { movedBy, previewOf } from './moved-by';
 
 export interface BlackoutsService {
   all(): Promise<Blackout[]>;
-  /** The blackouts and each covered day of the window (both ends count); a year from today's month on by default. */
+  /** The blackouts and each covered day of the window (both ends count); a year from today's month on by default. Throws 400 for a window over three years. */
   list(from?: string, to?: string): Promise<BlackoutList>;
   /** Throws 400; parcels on a newly closed day go on hold and their people are told, in the same transaction. */
   create(actor: Actor, body: z.output<typeof blackoutNew>): Promise<Blackout>;
@@ -45,6 +46,8 @@ export interface BlackoutsService {
 
 /** Days shown without a window: from the first of last month on. */
 const shownDays = 400;
+/** Longest window a calendar may ask for, in days: each of its days is looked at for each blackout. */
+const longestWindow = 1100;
 /** A preview names the days of the coming year, no more. */
 const previewDays = 366;
 
@@ -60,6 +63,10 @@ export function createBlackoutsService(deps: Deps): BlackoutsService {
     async list(from, to) {
       const first = from ?? addDays(`${(await todayOf(deps)).slice(0, 8)}01`, -31);
       const last = to ?? addDays(first, shownDays);
+      if (last < first || daysBetween(first, last) > longestWindow)
+        throw badInput([
+          { path: 'to', message: 'Ask for three years at most, with the end after the beginning.' },
+        ]);
       const blackouts = await findBlackouts(deps.db);
       const days = blackouts.flatMap((one) =>
         blackoutDates(one, first, last).map((date) => ({ date, blackoutId: one.id })),

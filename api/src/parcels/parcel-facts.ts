@@ -1,7 +1,7 @@
 import type * as z from 'zod';
 import type { Box, Counter, Parcel, parcelNew, PostalCodeInfo, Species } from '@shared/contract';
 import { badInput, type FieldProblem } from '@shared/errors';
-import { commonBand } from '@shared/parcels/common-band';
+import { bandConflict } from '@shared/parcels/common-band';
 import { doorRefusal } from '@shared/parcels/door-refusal';
 import type { Deps } from '../deps';
 
@@ -122,12 +122,8 @@ function checkContents(
     return [{ path: `contents.${i}.speciesId`, message }];
   });
   const known = facts.contents.flatMap((line) => byId.get(line.speciesId) ?? []);
-  const band = commonBand(known);
-  if (band && !band.ok)
-    errors.push({
-      path: 'contents',
-      message: `${capital(band.warmest)} and ${band.coolest} do not go into one box: no temperature suits both.`,
-    });
+  const conflict = bandConflict(known);
+  if (conflict !== null) errors.push({ path: 'contents', message: conflict });
   const atDoor = doorRefusal(facts.service, known);
   if (atDoor) errors.push({ path: 'service', message: atDoor });
   return errors;
@@ -191,5 +187,3 @@ function checkDates(facts: ParcelFacts, stored: ParcelFacts | null, today: strin
     return [{ path: 'latestDate', message: 'The latest day is over.' }];
   return [];
 }
-
-const capital = (text: string): string => text.charAt(0).toUpperCase() + text.slice(1);

@@ -2,18 +2,27 @@ import { rrulestr } from 'rrule';
 import { addDays } from './add-days';
 import { dayNumber } from './day-number';
 
+const weekday = '(MO|TU|WE|TH|FR|SA|SU)';
+const month = '(0?[1-9]|1[0-2])';
+const dayOfMonth = '(0?[1-9]|[12]\\d|3[01])';
+const weekOfYear = '(0?[1-9]|[1-4]\\d|5[0-3])';
+const dayOfYear = '(0{0,2}[1-9]|0?[1-9]\\d|[12]\\d\\d|3[0-5]\\d|36[0-6])';
+/** One to `most` values, joined by commas. */
+const list = (value: string, most: number) => new RegExp(`^${value}(,${value}){0,${most - 1}}$`);
+
+/** What each part may hold: the ranges of RFC 5545 section 3.3.10, so that the library never meets a value it cannot take. */
 const parts: Readonly<Record<string, RegExp>> = {
   FREQ: /^YEARLY$/,
-  BYMONTH: /^\d{1,2}(,\d{1,2}){0,11}$/,
-  BYMONTHDAY: /^[+-]?\d{1,2}(,[+-]?\d{1,2}){0,61}$/,
-  BYYEARDAY: /^[+-]?\d{1,3}(,[+-]?\d{1,3}){0,99}$/,
-  BYWEEKNO: /^[+-]?\d{1,2}(,[+-]?\d{1,2}){0,52}$/,
-  BYDAY: /^([+-]?\d{1,2})?(MO|TU|WE|TH|FR|SA|SU)(,([+-]?\d{1,2})?(MO|TU|WE|TH|FR|SA|SU)){0,13}$/,
-  BYSETPOS: /^[+-]?\d{1,3}(,[+-]?\d{1,3}){0,20}$/,
+  BYMONTH: list(month, 12),
+  BYMONTHDAY: list(`[+-]?${dayOfMonth}`, 62),
+  BYYEARDAY: list(`[+-]?${dayOfYear}`, 100),
+  BYWEEKNO: list(`[+-]?${weekOfYear}`, 53),
+  BYDAY: list(`([+-]?${weekOfYear})?${weekday}`, 14),
+  BYSETPOS: list(`[+-]?${dayOfYear}`, 21),
   INTERVAL: /^[1-9]\d?$/,
   COUNT: /^[1-9]\d{0,3}$/,
-  UNTIL: /^\d{8}(T\d{6}Z)?$/,
-  WKST: /^(MO|TU|WE|TH|FR|SA|SU)$/,
+  UNTIL: /^(19|20|21)\d\d(0[1-9]|1[0-2])(0[1-9]|[12]\d|3[01])(T\d{6}Z)?$/,
+  WKST: new RegExp(`^${weekday}$`),
 };
 
 /**
@@ -60,16 +69,25 @@ export function yearlyRuleDates(
   const counts = /(COUNT|INTERVAL)=/.test(text);
   const start = startDate ?? (counts ? '2000-01-01' : `${from.slice(0, 4)}-01-01`);
   const parsed = rrulestr(`RRULE:${text}`, { dtstart: utc(start) });
-  const found: string[] = [];
-  // RFC 5545 lets DTSTART be the first instance; rrule only lists what the rule itself yields, which is what we want.
-  for (const date of parsed.between(utc(from), utc(to), true)) found.push(date.toISOString().slice(0, 10));
-  return found;
+  // RFC 5545 lets DTSTART be the first instance; rrule only lists what the rule itself yields, which is what we want. It says a
+  // day twice that two positions name.
+  const found = parsed.between(utc(from), utc(to), true).map((date) => date.toISOString().slice(0, 10));
+  return [...new Set(found)];
 }
 
-/** Whether a rule yields any date in the ten years after `from`; one that never does is a mistake (February 30). */
+/**
+ * A day of the year meets each weekday again within 28 years (40 where a century's missing leap year lies between, as around
+ * 2100), so a rule that stays away longer is a mistake.
+ */
+const lookAheadDays = 40 * 366;
+
+/**
+ * Whether a rule yields any date in the forty years after `from`; one that never does is a mistake (February 30). It must not be
+ * stored: the library would look for its next date up to the year 9999 whenever a calendar is read.
+ */
 export function yearlyRuleEverFalls(rule: string, from: string, startDate: string | null = null): boolean {
   const first = startDate !== null && startDate > from ? startDate : from;
-  return yearlyRuleDates(rule, first, addDays(first, 3653), startDate).length > 0;
+  return yearlyRuleDates(rule, first, addDays(first, lookAheadDays), startDate).length > 0;
 }
 
 const utc = (date: string) => new Date(dayNumber(date) * 86_400_000);

@@ -1,6 +1,6 @@
 import * as z from 'zod';
 
-/** A plain calendar date, `YYYY-MM-DD`, that exists (no 31 February). */
+/** A plain calendar date, `YYYY-MM-DD`, that exists (no 31 February) and that a person may mean: 1900 to 2199. */
 export const plainDate = z
   .string()
   .regex(/^\d{4}-\d{2}-\d{2}$/, 'Use a date like 2026-12-08.')
@@ -9,7 +9,8 @@ export const plainDate = z
     const leap = year % 4 === 0 && (year % 100 !== 0 || year % 400 === 0);
     const lengths = [31, leap ? 29 : 28, 31, 30, 31, 30, 31, 31, 30, 31, 30, 31];
     return month >= 1 && month <= 12 && day >= 1 && day <= (lengths[month - 1] ?? 0);
-  }, 'That date does not exist.');
+  }, 'That date does not exist.')
+  .refine((text) => /^(19|20|21)/.test(text), 'Use a year from 1900 to 2199.');
 
 /** An instant as UTC ISO 8601 text, e.g. `2026-12-08T22:00:00.000Z`. */
 export const instant = z.iso.datetime({ offset: true, message: 'Use an ISO 8601 instant.' });

@@ -4,7 +4,6 @@ import { localInstant } from '../calendar/local-instant';
 import { isoWeekday } from '../calendar/iso-weekday';
 import type { Policy } from '../policy/policy';
 import type { DayQuestion } from '../verdict/day-question';
-import { ThermalError } from './thermal-error';
 
 export type PlaceRole = 'origin' | 'hub' | 'destination';
 export type LegKind =
@@ -38,8 +37,9 @@ type Surroundings = Policy['journey']['packed'];
 const usualCutOffMinute = 17 * 60;
 
 /**
- * The legs of a parcel shipped on a day, each on the clock of its place, in order and without a gap (design 5.2). Throws
- * ThermalError `bad-leg` when the policy's clocks make one end before it starts.
+ * The legs of a parcel shipped on a day, each on the clock of its place, in order and without a gap (design 5.2). A leg whose
+ * hour is over before it begins takes no time: a cut-off after the counter's usual departure, a counter that is ready before
+ * the usual arrival at the station, a drop-off so far west that the sort hub's midnight has passed.
  */
 export function journeyLegs(question: DayQuestion): Leg[] {
   const { shipDate, origin, hub, policy } = question;
@@ -60,13 +60,13 @@ export function journeyLegs(question: DayQuestion): Leg[] {
     ...to.last,
   ];
   const startMs = collectedMs - journey.packedBeforeCollectionMinutes * 60_000;
-  return stretches.map(([kind, role, endMs, around], index) => {
-    const legStartMs = stretches[index - 1]?.[2] ?? startMs;
-    if (!(endMs >= legStartMs))
-      throw new ThermalError('bad-leg', `The leg “${kind}” would end before it starts.`);
+  let reachedMs = startMs;
+  return stretches.map(([kind, role, plannedMs, around]) => {
+    const legStartMs = reachedMs;
+    reachedMs = Math.max(reachedMs, plannedMs);
     const cabin = kind === 'truck' ? journey.truck : { cabinF: 0, cabinAboveF: 0 };
     const { cabinF, cabinAboveF } = cabin;
-    return { kind, role, startMs: legStartMs, endMs, ...around, cabinF, cabinAboveF };
+    return { kind, role, startMs: legStartMs, endMs: reachedMs, ...around, cabinF, cabinAboveF };
   });
 }
 

@@ -1,7 +1,7 @@
 import type { ContentLine } from '../contract/days';
 import type { Species } from '../contract/places';
 import { badInput } from '../errors';
-import { commonBand } from '../parcels/common-band';
+import { bandConflict, commonBand } from '../parcels/common-band';
 
 /** The temperature limits of a species, °F, as far as verdicts need them. */
 export type SpeciesLimits = Pick<
@@ -31,14 +31,18 @@ export interface ContentsLimits {
   readonly outdoorHighF: number | null;
 }
 
-/** The intersection of all limits in the box; the band may be empty (see `assertCommonBand`). Contents must not be empty. */
+/**
+ * The intersection of all limits in the box; the band may be empty (see `assertCommonBand`). Throws RangeError for an empty box.
+ */
 export function contentsLimits(contents: readonly ContentsLine[]): ContentsLimits {
   const all = contents.map((line) => line.species);
+  const band = commonBand(all);
+  if (!band) throw new RangeError('There is nothing in the box.');
   const lows = all.flatMap((one) => (one.outdoorLowF === null ? [] : [one.outdoorLowF]));
   const highs = all.flatMap((one) => (one.outdoorHighF === null ? [] : [one.outdoorHighF]));
   return {
-    bandLowF: Math.max(...all.map((one) => one.bandLowF)),
-    bandHighF: Math.min(...all.map((one) => one.bandHighF)),
+    bandLowF: band.lowF,
+    bandHighF: band.highF,
     enduranceLowF: Math.max(...all.map((one) => one.enduranceLowF)),
     enduranceHighF: Math.min(...all.map((one) => one.enduranceHighF)),
     outdoorLowF: lows.length > 0 ? Math.max(...lows) : null,
@@ -48,10 +52,7 @@ export function contentsLimits(contents: readonly ContentsLine[]): ContentsLimit
 
 /** The limits of a box's contents. Throws bad-input at `contents`, naming the two species whose bands do not meet. */
 export function assertCommonBand(contents: readonly ContentsLine[]): ContentsLimits {
-  const band = commonBand(contents.map(({ species }) => species));
-  if (band && !band.ok) {
-    const message = `${band.warmest} and ${band.coolest} do not go into one box: no temperature suits both.`;
-    throw badInput([{ path: 'contents', message: message.charAt(0).toUpperCase() + message.slice(1) }]);
-  }
+  const message = bandConflict(contents.map(({ species }) => species));
+  if (message !== null) throw badInput([{ path: 'contents', message }]);
   return contentsLimits(contents);
 }

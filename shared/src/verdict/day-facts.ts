@@ -4,6 +4,7 @@ import { cutOffInstant } from '../calendar/cut-off-instant';
 import { dateAt } from '../calendar/date-at';
 import { daysBetween } from '../calendar/days-between';
 import type { WorkPlace } from '../calendar/is-working-day';
+import { isoWeekday } from '../calendar/iso-weekday';
 import { localInstant } from '../calendar/local-instant';
 import { slackDays } from '../calendar/slack-days';
 import { startOfLocalDay } from '../calendar/start-of-local-day';
@@ -44,26 +45,20 @@ export interface DayFacts extends DayQuestion {
   readonly limits: ContentsLimits;
   /** Origin, hub, destination. */
   readonly places: readonly RoutePlace[];
-  /** From packing to collecting. */
+  /** From packing to collecting, by the clocks of the policy and the counter. */
   readonly hoursInBox: number;
   /** Lowest and highest of the route's places and days; null without any forecast. */
   readonly outdoor: RangeF | null;
 }
 
 const hour = 60;
-/** Minutes from packing to collecting, and hours from "ready" to "collected" at a counter (design 5.2, assumptions). */
-const packedBeforeCollectingMinutes = 60;
-const collectedAfterReadyMs = 2 * 3_600_000;
-/** A parcel leaves the drop-off counter at 20:00 and is through the sort hub well before 06:00 (design 5.2, assumptions). */
-const leavesCounterMinute = 20 * hour;
+/** The sort hub's night, whose weather and alerts count. Assumption; the hub is left well before 06:00 (design 5.2). */
 const hubNight = { fromMinute: 20 * hour, toMinute: 6 * hour };
-/** Door service is planned to be done by noon (design 5.2, assumption). */
-export const doorMinute = 12 * hour;
 const mondayToFriday = [1, 2, 3, 4, 5];
 
 /** Works out what all checks of one ship day share. Throws RangeError when the calendar does not reach far enough. */
 export function dayFacts(question: DayQuestion): DayFacts {
-  const { origin, shipDate, destination, policy, calendar } = question;
+  const { origin, shipDate, policy, calendar } = question;
   const nowMs = Date.parse(question.now);
   const today = dateAt(nowMs, origin.zone);
   const arrivalDate = addDays(shipDate, 1);
@@ -72,8 +67,9 @@ export function dayFacts(question: DayQuestion): DayFacts {
   const cutOffMs = cutOffInstant(origin, shipDate);
   // On a day without a cut-off the verdict is shut anyway; the afternoon stands in so that the weather can still be shown.
   const handOverMs = cutOffMs ?? localInstant(shipDate, 17 * hour, origin.zone);
-  const packedMs = handOverMs - (policy.packedBeforeCutOffMinutes + packedBeforeCollectingMinutes) * 60_000;
-  const collectedMs = arrivalAtMs + (destination.kind === 'hold' ? collectedAfterReadyMs : 0);
+  const { journey, packedBeforeCutOffMinutes } = policy;
+  const packedMs = handOverMs - (packedBeforeCutOffMinutes + journey.packedBeforeCollectionMinutes) * 60_000;
+  const collectedMs = localInstant(arrivalDate, to.openMinute, to.zone) + to.heldMinutes * 60_000;
   const places = routePlaces(question, { arrivalDate, packedMs, city: to.city, zone: to.zone });
   return {
     ...question,
@@ -101,7 +97,7 @@ export function dayFacts(question: DayQuestion): DayFacts {
   };
 }
 
-function destinationFacts({ destination, origin }: DayQuestion) {
+function destinationFacts({ destination, origin, shipDate, policy: { journey } }: DayQuestion) {
   if (destination.kind === 'hold') {
     const { counter } = destination;
     const work = {
@@ -110,12 +106,16 @@ function destinationFacts({ destination, origin }: DayQuestion) {
       state: counter.state,
       counterId: counter.id,
     };
+    const { openingHours, commitMinute } = counter;
+    const weekday = String(isoWeekday(addDays(shipDate, 1))) as keyof typeof openingHours;
     return {
       work,
       name: counter.name,
       city: counter.city,
       zone: counter.zone,
-      readyMinute: counter.commitMinute,
+      readyMinute: commitMinute,
+      openMinute: Math.max(commitMinute, openingHours[weekday]?.openMinute ?? 0),
+      heldMinutes: journey.heldMinutes,
     };
   }
   const { door } = destination;
@@ -125,11 +125,20 @@ function destinationFacts({ destination, origin }: DayQuestion) {
     state: door.state,
     counterId: null,
   };
-  return { work, name: door.name, city: door.city, zone: door.zone, readyMinute: doorMinute };
+  const byMinute = journey.truckUntilMinute;
+  return {
+    work,
+    name: door.name,
+    city: door.city,
+    zone: door.zone,
+    readyMinute: byMinute,
+    openMinute: byMinute,
+    heldMinutes: 0,
+  };
 }
 
 function routePlaces(
-  { shipDate, origin, hub, weather }: DayQuestion,
+  { shipDate, origin, hub, weather, policy }: DayQuestion,
   known: { arrivalDate: string; packedMs: number; city: string; zone: string },
 ): RoutePlace[] {
   const bucket = (forecast: typeof weather.origin) => (forecast ? placeWeather(forecast) : null);
@@ -143,7 +152,7 @@ function routePlaces(
     fromMs: localInstant(shipDate, hubNight.fromMinute, hub.zone),
     toMs: localInstant(arrivalDate, hubNight.toMinute, hub.zone),
   };
-  const leavesMs = localInstant(shipDate, leavesCounterMinute, origin.zone);
+  const leavesMs = localInstant(shipDate, policy.journey.dropOffUntilMinute, origin.zone);
   const arrivalDay = { alertFromMs: startOfLocalDay(arrivalDate, zone), alertToMs: days(zone).toMs };
   return [
     {

@@ -50,7 +50,7 @@ const sentences: Readonly<Record<string, (v: Values) => string>> = {
   'not-ready': (v) => `The parcel is ready from ${date(v, 'date')}.`,
   'too-late': (v) => `The latest day you gave is ${date(v, 'date')}.`,
   'fed-lately': (v) =>
-    `The last meal was ${count(number(v, 'days'), 'day')} before; the circle keeps ${count(number(v, 'need'), 'day')} without food.`,
+    `The last meal was ${mealText(number(v, 'days'))}; the circle keeps ${count(number(v, 'need'), 'day')} without food.`,
   'breeder-away': (v) => `You are away on ${date(v, 'date')}.`,
   'buyer-away': (v) => `The buyer cannot collect on ${date(v, 'date')}.`,
   'buyer-not-said': (v) =>
@@ -82,6 +82,8 @@ const sentences: Readonly<Record<string, (v: Values) => string>> = {
     `A ${number(v, 'hours')}-hour heat pack is less than the ${Math.round(number(v, 'needHours'))} h planned with a day to spare${v['longer'] ? `; use the ${text(v, 'longer')}-hour one` : ''}.`,
 };
 
+const mealText = (days: number): string =>
+  days > 0 ? `${count(days, 'day')} before` : days === 0 ? 'that same day' : 'after that day';
 const limitOf = (v: Values): string => (v['species'] ? ` for a ${text(v, 'species')}` : '');
 const ahead = (v: Values): string =>
   number(v, 'leadDays') === 0 ? 'for today' : `${count(number(v, 'leadDays'), 'day')} ahead`;
