@@ -1,4 +1,4 @@
-import Holidays from 'date-holidays';
+import Holidays, { type HolidaysTypes } from 'date-holidays';
 import { blackoutDates } from '@shared/calendar/blackout-dates';
 import { federalHolidayRules } from '@shared/calendar/federal-holiday-rules';
 import { observedHolidays } from '@shared/calendar/observed-holidays';
@@ -60,26 +60,39 @@ describe.each([2026, 2027])('federal holidays observed in %d', (year) => {
   });
 });
 
+/**
+ * From 2025 to 2036 the package knows the same weekdays as we do, if two of its habits are met: it files the substitutes of
+ * Veterans Day (November 10, 2028 and 2034, November 12, 2029 and 2035) as bank holidays, so a list of its public ones lacks
+ * them; and the substitute of a Saturday New Year's Day stands in the list of the year before, in which it falls.
+ */
 describe('date-holidays 3.37.0, country US', () => {
-  // Its substitutes of Veterans Day have the type "bank" (2028-11-10 and others), so both types are taken; its list of a year
-  // holds the substitute for next January 1.
-  const theirs = (year: number): string[] => {
-    const list = new Holidays('US')
-      .getHolidays(year)
-      .filter(({ type }) => type === 'public' || (type === 'bank' && /Veterans/.test(type)));
-    return [
-      ...new Set(
-        list
-          .map(({ date }) => date.slice(0, 10))
-          .filter((date) => date.startsWith(String(year)) && isWeekday(date)),
-      ),
-    ].sort();
+  const weekdaysOf = (year: number, counts: (holiday: HolidaysTypes.Holiday) => boolean): string[] => {
+    const list = new Holidays('US').getHolidays(year).filter(counts);
+    const dates = list.map(({ date }) => date.slice(0, 10));
+    return [...new Set(dates.filter((date) => date.startsWith(String(year)) && isWeekday(date)))].sort();
   };
-
-  it.each([2025, 2026, 2027])('has the same weekdays in %d', (year) => {
-    const ours = observedHolidays(year)
+  const federal = ({ type, name }: HolidaysTypes.Holiday) =>
+    type === 'public' || (type === 'bank' && name.startsWith('Veterans Day'));
+  const ours = (year: number) =>
+    observedHolidays(year)
       .map(({ observed }) => observed)
       .filter((date) => date.startsWith(String(year)));
-    expect(ours).toEqual(theirs(year));
+
+  it.each([2025, 2026, 2027, 2028, 2029, 2030, 2031, 2032, 2033, 2034, 2035, 2036])(
+    'has the same weekdays in %d',
+    (year) => {
+      expect(ours(year)).toEqual(weekdaysOf(year, federal));
+    },
+  );
+
+  it('lacks the substitutes of Veterans Day among its public holidays, and nothing else', () => {
+    const differ = [2026, 2027, 2028, 2029, 2034, 2035].flatMap((year) => {
+      const theirs = weekdaysOf(year, ({ type }) => type === 'public');
+      return [
+        ...ours(year).filter((date) => !theirs.includes(date)),
+        ...theirs.filter((date) => !ours(year).includes(date)),
+      ];
+    });
+    expect(differ).toEqual(['2028-11-10', '2029-11-12', '2034-11-10', '2035-11-12']);
   });
 });
