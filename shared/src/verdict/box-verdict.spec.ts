@@ -54,7 +54,7 @@ describe('the pack', () => {
     expect(dayVerdict(at(68)).pack).toBe('none');
   });
 
-  it('is no 40-hour one where a day late would outlast it: 23 h in the box and 24 to spare are 47', () => {
+  it('is no 40-hour one where a day late would outlast it: 24 h in the box and 24 to spare are 48', () => {
     const patient = { ...at(50), policy: { ...defaultPolicy, heatPackSpareHours: 12 } };
     expect(packsToTry(dayFacts(at(50)))).not.toContain('heat-40');
     expect(packsToTry(dayFacts(patient))).toContain('heat-40');

@@ -94,6 +94,67 @@ describe('any question', () => {
     );
   });
 
+  it('never gets worse by a wider band or by wider endurance of the animal', () => {
+    const room = fc.integer({ min: 0, max: 15 });
+    const animal = fc.record({
+      lowF: fc.integer({ min: 40, max: 70 }),
+      width: fc.integer({ min: 5, max: 40 }),
+      under: room,
+      over: room,
+    });
+    const more = fc.record({ low: room, high: room, enduresLow: room, enduresHigh: room });
+    // Weather within the guard rails, so that the box decides.
+    const now = '2026-12-01T12:00:00.000Z';
+    const inside = fc.integer({ min: 45, max: 84 });
+    fc.assert(
+      fc.property(inside, inside, animal, more, (nearF, farF, { lowF, width, under, over }, wider) => {
+        const weather = {
+          ...sampleQuestion().weather,
+          origin: sampleForecast('America/Chicago', now, nearF),
+          destination: sampleForecast('America/Phoenix', now, farF),
+        };
+        const box = (by: typeof wider) => {
+          const bandLowF = lowF - by.low;
+          const bandHighF = lowF + width + by.high;
+          const species = {
+            ...cornSnake,
+            bandLowF,
+            bandHighF,
+            enduranceLowF: bandLowF - under - by.enduresLow,
+            enduranceHighF: bandHighF + over + by.enduresHigh,
+          };
+          return [{ species, quantity: 1, massG: 160 }];
+        };
+        const narrow = ask({ weather, contents: box({ low: 0, high: 0, enduresLow: 0, enduresHigh: 0 }) });
+        const wide = ask({ weather, contents: box(wider) });
+        expect(verdictSeverity(wide.verdict)).toBeLessThanOrEqual(verdictSeverity(narrow.verdict));
+      }),
+      { numRuns: 300 },
+    );
+  });
+
+  it('is shut beyond the guard rails, and no degree further out ever opens it again', () => {
+    const { lowF, highF } = defaultPolicy.guardRails.hold;
+    const beyond = fc.tuple(
+      fc.constantFrom('origin', 'destination'),
+      fc.boolean(),
+      fc.integer({ min: 1, max: 60 }),
+    );
+    const hardy = { ...cornSnake, bandLowF: -90, bandHighF: 190, enduranceLowF: -95, enduranceHighF: 195 };
+    fc.assert(
+      fc.property(beyond, ([place, isCold, byF]) => {
+        const now = '2026-12-01T12:00:00.000Z';
+        const tempF = isCold ? lowF - byF : highF + byF;
+        const weather = {
+          ...sampleQuestion().weather,
+          [place]: sampleForecast(place === 'origin' ? 'America/Chicago' : 'America/Phoenix', now, tempF),
+        };
+        const day = ask({ weather, contents: [{ species: hardy, quantity: 1, massG: 160 }] });
+        expect(day.verdict).toBe('shut');
+      }),
+    );
+  });
+
   it('gets the same answer twice, and is not changed by being asked', () => {
     fc.assert(
       fc.property(question, (changes) => {

@@ -109,18 +109,6 @@ describe('the calendar', () => {
     expect(at('2026-12-01T23:00:00.000Z')).toContain('cut-off-passed');
     expect(codes(ask({ shipDate: '2026-11-30' }))).toContain('past');
   });
-
-  it('keeps the clock of each place over a change of the clocks', () => {
-    // On Sunday, March 14, 2027 Denver goes from UTC−7 to UTC−6 (Energy Policy Act of 2005: second Sunday of March).
-    const change = (shipDate: string, now: string) =>
-      ask({ shipDate, now, destination: { kind: 'hold', counter: denver } }).arrival.at;
-    expect(change('2027-03-11', '2027-03-10T12:00:00.000Z')).toBe('2027-03-12T16:00:00.000Z');
-    expect(change('2027-03-15', '2027-03-12T12:00:00.000Z')).toBe('2027-03-16T15:00:00.000Z');
-    // November 1, 2026 has 25 hours in Texas: the cut-off of the Monday after is 17:00 there, 23:00 UTC, not 22:00.
-    const monday = (now: string) => codes(ask({ shipDate: '2026-11-02', now }));
-    expect(monday('2026-11-02T22:30:00.000Z')).not.toContain('cut-off-passed');
-    expect(monday('2026-11-02T23:00:00.000Z')).toContain('cut-off-passed');
-  });
 });
 
 describe('the parcel, its breeder and its buyer', () => {

@@ -44,7 +44,9 @@ const sentences: Readonly<Record<string, (v: Values) => string>> = {
   'arrival-closed': (v) =>
     `It would arrive on ${date(v, 'date')}, when the ${text(v, 'place')} hands nothing out${v['title'] ? ` (${text(v, 'title')})` : ''}, and rest over a day off.`,
   'no-slack': (v) =>
-    `No working day follows the arrival at the ${text(v, 'place')}: a late parcel would wait over the days off${v['next'] ? ` until ${date(v, 'next')}` : ''}.`,
+    number(v, 'days') > 0
+      ? `Only one working day follows the arrival at the ${text(v, 'place')}; the circle keeps two.`
+      : `No working day follows the arrival at the ${text(v, 'place')}: a late parcel would wait over the days off${v['next'] ? ` until ${date(v, 'next')}` : ''}.`,
   slack: (v) =>
     `${number(v, 'days') === 1 ? 'One working day follows' : 'Two working days follow'} the arrival as slack.`,
   'not-ready': (v) => `The parcel is ready from ${date(v, 'date')}.`,
