@@ -36,6 +36,9 @@ const paths = (body: unknown) => (body as { errors: { path: string }[] }).errors
 const mails = async (email: string, like: string) =>
   site.db('outbox').where({ to_email: email }).whereLike('text', like);
 
+const neverDays = Array.from({ length: 20 }, () => 'BYMONTH=2;BYMONTHDAY=30');
+const yearly = (parts: string) => `FREQ=YEARLY;${parts}`;
+
 describe('a new blackout', () => {
   it('takes the parcels off its day, says why, and tells breeder and buyer', async () => {
     const parcel = await parcelOn('2026-12-07');
@@ -135,6 +138,22 @@ describe('a new blackout', () => {
       { kind: 'yearly', startDate: null, rules: 'FREQ=YEARLY;BYMONTH=2;BYMONTHDAY=30' },
       'rules',
     ],
+    [
+      'a rule out of its range',
+      { kind: 'yearly', startDate: null, rules: 'FREQ=YEARLY;BYMONTHDAY=31;BYSETPOS=-400' },
+      'rules',
+    ],
+    [
+      'a weekday that is counted from nought',
+      { kind: 'yearly', startDate: null, rules: 'FREQ=YEARLY;BYDAY=0MO' },
+      'rules',
+    ],
+    // One good line must not carry others that the calendar would search for up to the year 9999 at every look.
+    [
+      'a day that never comes behind one that does',
+      { kind: 'yearly', startDate: null, rules: ['BYMONTHDAY=1', ...neverDays].map(yearly).join('\n') },
+      'rules',
+    ],
     ['a scope without its counter', { scope: 'counter' }, 'counterId'],
     ['a counter that does not exist', { scope: 'counter', counterId: 999 }, 'counterId'],
     ['a carrier that does not exist', { scope: 'carrier', carrierId: 999 }, 'carrierId'],
@@ -143,6 +162,49 @@ describe('a new blackout', () => {
     const { body } = await admin.post('/api/blackouts').send(oneDay('2026-12-07', changes)).expect(400);
     expect(paths(body)).toContain(path);
     expect(await site.db('blackouts').select('id')).toEqual([]);
+  });
+
+  it('leaves parcels that still seek a day, those aboard, and those that never had one', async () => {
+    const seeking = (await breeder.post('/api/parcels').send(parcelBody(site)).expect(201)).body as Parcel;
+    const flexible = { from: '2026-12-07', to: '2026-12-09' };
+    await breeder.put(`/api/parcels/${seeking.id}/booking`).send({ flexible }).expect(200);
+    const draft = (await breeder.post('/api/parcels').send(parcelBody(site)).expect(201)).body as Parcel;
+    const aboard = await parcelOn('2026-12-07');
+    await site.db('parcels').where({ id: aboard.id }).update({ state: 'aboard' });
+    const sent = (await site.db('outbox').select('id')).length;
+    await enter(oneDay('2026-12-07'));
+    expect(await site.db('outbox').select('id')).toHaveLength(sent);
+    expect((await stateOf(seeking)).state).toBe('seeking');
+    expect((await stateOf(draft)).state).toBe('draft');
+    expect(await stateOf(aboard)).toMatchObject({ state: 'aboard', shipDate: '2026-12-07' });
+  });
+
+  it('also takes a parcel that is packed already', async () => {
+    const packed = await parcelOn('2026-12-07');
+    await site.db('parcels').where({ id: packed.id }).update({ state: 'packed' });
+    await enter(oneDay('2026-12-07', { scope: 'carrier', carrierId: 1 }));
+    expect((await stateOf(packed)).state).toBe('on-hold');
+  });
+
+  it('is remembered with who entered, changed and removed it', async () => {
+    const blackout = await enter(oneDay('2026-12-16'));
+    await admin.patch(`/api/blackouts/${blackout.id}`).send({ title: 'Stocktaking' }).expect(200);
+    await admin.delete(`/api/blackouts/${blackout.id}`).expect(204);
+    const history = await site.deps.services.history.of('blackout', blackout.id);
+    expect(history.map(({ who, text }) => `${who}: ${text}`)).toEqual([
+      'Ada Admin: Removed “Stocktaking”.',
+      'Ada Admin: Changed “Stocktaking”.',
+      'Ada Admin: Entered “Inventory day”.',
+    ]);
+  });
+
+  it('saves nothing at all when something on the way fails', async () => {
+    const parcel = await parcelOn('2026-12-07');
+    await site.db.schema.dropTable('outbox');
+    await admin.post('/api/blackouts').send(oneDay('2026-12-07')).expect(500);
+    expect((await stateOf(parcel)).state).toBe('booked');
+    expect(await site.db('blackouts').select('id')).toEqual([]);
+    expect(await site.db('history').where({ subject_kind: 'blackout' })).toEqual([]);
   });
 
   it('is held to its rules as a whole when a part is changed', async () => {
@@ -193,8 +255,19 @@ describe('the preview', () => {
     ]);
     expect((await stateOf(parcel)).state).toBe('booked');
     expect(await site.db('blackouts').select('id')).toEqual([]);
+    const sent = await site.db('outbox').max('id as last').first();
     await enter(ask.blackout);
     expect((await stateOf(parcel)).state).toBe('on-hold');
+    // Those the preview names, and nobody else, are written to.
+    const written = await site
+      .db('outbox')
+      .where('id', '>', (sent as { last: number }).last)
+      .distinct('to_email as email');
+    expect(written.map(({ email }) => email as string).sort()).toEqual([
+      'breeder@example.org',
+      'buyer@example.org',
+      'coordinator@example.org',
+    ]);
   });
 
   it('of an edit counts only what newly falls, of a removal nothing', async () => {
@@ -216,6 +289,34 @@ describe('the preview', () => {
   });
 });
 
+describe('a federal holiday', () => {
+  it('is a blackout like others: an admin lifts a day of it, and may change or remove it', async () => {
+    // Christmas Day 2026 is a Friday (5 U.S.C. 6103(a)).
+    const { id, version } = await enter({
+      ...oneDay('2026-12-25'),
+      title: 'Christmas Day',
+      kind: 'yearly',
+      startDate: null,
+      rules: yearly('BYMONTH=12;BYMONTHDAY=25'),
+    });
+    await site.db('blackouts').where({ id }).update({ source: 'federal-holiday' });
+    const days = async () =>
+      ((await breeder.get('/api/blackouts?from=2026-12-01&to=2027-12-31')).body as BlackoutList).days;
+    expect((await days()).map(({ date }) => date)).toEqual(['2026-12-25', '2027-12-25']);
+    const edit = (body: object) => admin.patch(`/api/blackouts/${id}`).send(body).expect(200);
+    const lifted = (await edit({ liftedDates: ['2026-12-25', '2026-12-25'] })).body as Blackout;
+    expect(lifted).toMatchObject({
+      liftedDates: ['2026-12-25'],
+      source: 'federal-holiday',
+      version: version + 1,
+    });
+    expect((await days()).map(({ date }) => date)).toEqual(['2027-12-25']);
+    await edit({ scope: 'state', state: 'TX' });
+    await admin.delete(`/api/blackouts/${id}`).expect(204);
+    expect(await days()).toEqual([]);
+  });
+});
+
 describe('the calendar', () => {
   it('lists each covered day of a window', async () => {
     const { id } = await enter({
@@ -231,6 +332,9 @@ describe('the calendar', () => {
       { date: '2027-12-24', blackoutId: id },
     ]);
     await breeder.get('/api/blackouts?from=2026-01-01&to=2099-12-31').expect(400);
+    await breeder.get('/api/blackouts?to=2199-12-31').expect(400);
+    await breeder.get('/api/blackouts?from=2190-12-31').expect(200);
+    await breeder.get('/api/blackouts?from=9999-12-31').expect(400);
     await breeder.get('/api/blackouts?from=2026-02-31').expect(400);
   });
 

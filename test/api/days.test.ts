@@ -146,6 +146,31 @@ describe('a route check', () => {
     expect(days.find(({ date }) => date === '2026-12-01')?.verdict).toBe('open');
   });
 
+  it('refuses two species that no temperature suits, and names them', async () => {
+    await site.db('species').where({ id: site.ids.crestedGecko }).update({ band_low_f: 40, band_high_f: 58 });
+    const contents = [site.ids.cornSnake, site.ids.crestedGecko].map((speciesId) => ({
+      speciesId,
+      quantity: 1,
+      massG: 100,
+    }));
+    const { body } = await breeder.post('/api/route-checks').send(question({ contents })).expect(400);
+    expect((body as { errors: unknown }).errors).toEqual([
+      {
+        path: 'contents',
+        message: 'Corn snake and crested gecko do not go into one box: no temperature suits both.',
+      },
+    ]);
+  });
+
+  it('judges a counter with a late cut-off as any other', async () => {
+    const late = Object.fromEntries([1, 2, 3, 4, 5].map((weekday) => [String(weekday), 21 * 60]));
+    await site
+      .db('counters')
+      .where({ id: site.ids.dropOffCounter })
+      .update({ cut_off_minutes: JSON.stringify(late) });
+    expect(verdicts(await check())['2026-12-02']).toBe('open');
+  });
+
   it.each([
     ['a ZIP that does not exist', { destination: { postalCode: '00000' } }, 'destination.postalCode'],
     ['a counter that does not exist', { destination: { counterId: 999 } }, 'destination.counterId'],
@@ -160,6 +185,8 @@ describe('a route check', () => {
     ['a box that does not exist', { boxId: 999 }, 'boxId'],
     ['a drop-off at a counter that takes none', { dropOffCounterId: 2 }, 'dropOffCounterId'],
     ['a hundred days', { days: 100 }, 'days'],
+    ['a day at the end of all calendars', { from: '9999-12-31' }, 'from'],
+    ['a day before all clocks', { from: '0001-01-01' }, 'from'],
     [
       'nothing at all',
       { destination: undefined, service: undefined, contents: undefined, boxId: undefined },
@@ -222,6 +249,7 @@ describe('the days of a parcel', () => {
       '2026-12-07',
     ]);
     await breeder.get(`/api/parcels/${parcel.id}/days?days=99`).expect(400);
+    await breeder.get(`/api/parcels/${parcel.id}/days?from=9999-12-31`).expect(400);
     await breeder.get('/api/parcels/999999/days').expect(404);
   });
 });

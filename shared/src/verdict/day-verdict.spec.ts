@@ -4,15 +4,7 @@ import { federalHolidayRules } from '../calendar/federal-holiday-rules';
 import { defaultPolicy } from '../policy/policy';
 import type { DayQuestion } from './day-question';
 import { dayVerdict, stripDays } from './day-verdict';
-import {
-  cornSnake,
-  denver,
-  phoenix,
-  sampleCounter,
-  sampleForecast,
-  sampleQuestion,
-  texas,
-} from './question-samples';
+import { cornSnake, phoenix, sampleCounter, sampleForecast, sampleQuestion, texas } from './question-samples';
 
 const ask = (changes: Parameters<typeof sampleQuestion>[0] = {}): DayVerdict =>
   dayVerdict(sampleQuestion(changes));
