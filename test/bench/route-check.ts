@@ -12,6 +12,7 @@ import { readConfig } from '@api/config';
 import { migrate, openDatabase } from '@api/database/connection';
 import { createDeps } from '@api/deps';
 import { createForecastFake } from '@api/fakes/forecast/forecast-fake';
+import { seedHolidays } from '../../seeds/seed-places';
 import { password, seedSmallCircle } from '../support/small-circle';
 import type { BenchLine } from './bench-line';
 
@@ -75,6 +76,8 @@ async function startSite(folder: string, ends: (() => unknown)[]): Promise<Call>
   ends.push(() => db.destroy());
   await migrate(db);
   const ids = await seedSmallCircle(db);
+  // Each of a real circle's yearly rules counts at every look.
+  await seedHolidays(db, new Date().toISOString());
   const config = readConfig({
     SESSION_SECRET: 'a secret for the bench only, forty characters',
     SMTP_URL: 'smtp://127.0.0.1:9',

@@ -51,6 +51,11 @@ export function yearlyRuleProblem(rule: string, startDate: string | null = null)
   return null;
 }
 
+// Every look at a day expands the same few rules over the same few weeks, and parsing a rule costs more than judging the day.
+// The dates follow from the key alone, so remembering them changes nothing but the time it takes; the size is bounded.
+const remembered = new Map<string, readonly string[]>();
+const most = 2000;
+
 /**
  * The dates of one RRULE value from `from` to `to` (both ends count), evaluated in UTC so that no zone can shift a date.
  * `startDate` is its DTSTART: nothing lies before it, and INTERVAL and COUNT count from it; without one they count from 2000.
@@ -61,7 +66,10 @@ export function yearlyRuleDates(
   from: string,
   to: string,
   startDate: string | null = null,
-): string[] {
+): readonly string[] {
+  const key = `${rule} ${from} ${to} ${startDate ?? ''}`;
+  const known = remembered.get(key);
+  if (known) return known;
   const problem = yearlyRuleProblem(rule, startDate);
   if (problem) throw new RangeError(problem);
   const text = rule.trim().replace(/^RRULE:/, '');
@@ -72,7 +80,10 @@ export function yearlyRuleDates(
   // RFC 5545 lets DTSTART be the first instance; rrule only lists what the rule itself yields, which is what we want. It says a
   // day twice that two positions name.
   const found = parsed.between(utc(from), utc(to), true).map((date) => date.toISOString().slice(0, 10));
-  return [...new Set(found)];
+  const dates = Object.freeze([...new Set(found)]);
+  if (remembered.size >= most) remembered.clear();
+  remembered.set(key, dates);
+  return dates;
 }
 
 /**
