@@ -54,6 +54,17 @@ describe('the pack', () => {
     expect(dayVerdict(at(68)).pack).toBe('none');
   });
 
+  it('is decided by a day late where both are as good on time', () => {
+    const patient = { ...cornSnake, bandLowF: 44, bandHighF: 110, enduranceLowF: 44, enduranceHighF: 111 };
+    const contents = [{ species: patient, quantity: 1, massG: 160 }];
+    const cold = { ...at(42), contents };
+    const without = dayVerdict({ ...cold, policy: { ...defaultPolicy, heatPackBelowF: 0 } });
+    const chosen = dayVerdict(cold);
+    expect([without.pack, without.chance]).toEqual(['none', 1]);
+    expect([chosen.pack, chosen.chance]).toEqual(['heat-72', 1]);
+    expect(chosen.lateChance).toBeGreaterThan(without.lateChance ?? 1);
+  });
+
   it('is no 40-hour one where a day late would outlast it: 24 h in the box and 24 to spare are 48', () => {
     const patient = { ...at(50), policy: { ...defaultPolicy, heatPackSpareHours: 12 } };
     expect(packsToTry(dayFacts(at(50)))).not.toContain('heat-40');
