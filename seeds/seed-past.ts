@@ -8,6 +8,8 @@ import { aboardParcels, arrivedParcels, closedParcels, type ParcelSeed } from '.
 import { actorOf, enterParcel, isShipDay, known, shipDaysBefore, type SeedWorld } from './seed-world';
 
 const minuteMs = 60_000;
+/** Who drove every run that lies behind. */
+const driver = 'coordinator@example.org';
 
 /**
  * What lies behind the circle: a run whose parcels are closed, one whose parcels arrived, and one underway. On a day
@@ -33,12 +35,7 @@ async function seedClosed(world: SeedWorld, date: string): Promise<void> {
   for (const parcel of run.parcels) {
     await report(world, parcel, date, 'arrived-well', 'Active and drinking. Thank you!');
     const deps = world.at(localInstant(addDays(date, 3), 9 * 60, world.zone));
-    await deps.services.parcels.move(
-      parcel.id,
-      'closed',
-      await actorOf(world, 'coordinator@example.org'),
-      'Closed.',
-    );
+    await deps.services.parcels.move(parcel.id, 'closed', await actorOf(world, driver), 'Closed.');
   }
 }
 
@@ -55,23 +52,23 @@ async function seedUnderway(world: SeedWorld, date: string): Promise<void> {
   const run = await confirmedRun(world, date, aboardParcels);
   const leftMs = Math.min(now.clock.nowMs(), Date.parse(run.departAt));
   const deps = world.at(leftMs);
-  await deps.services.runs.depart(await driverOf(world, run), run.id, null, undefined);
+  await deps.services.runs.depart(await actorOf(world, driver), run.id, null, undefined);
 }
 
 async function handedOverRun(world: SeedWorld, date: string, seeds: readonly ParcelSeed[]): Promise<Run> {
   const run = await confirmedRun(world, date, seeds);
-  const driver = await driverOf(world, run);
-  await world.at(Date.parse(run.departAt)).services.runs.depart(driver, run.id, null, undefined);
+  const actor = await actorOf(world, driver);
+  await world.at(Date.parse(run.departAt)).services.runs.depart(actor, run.id, null, undefined);
   const tracking = run.parcels.map(({ id }) => ({
     parcelId: id,
     number: `LK${date.replaceAll('-', '')}${String(id).padStart(4, '0')}`,
   }));
-  return world.at(Date.parse(run.arriveAt)).services.runs.handOver(driver, run.id, null, tracking);
+  return world.at(Date.parse(run.arriveAt)).services.runs.handOver(actor, run.id, null, tracking);
 }
 
 /** A run of the past, confirmed the afternoon before. Its days cannot be judged any more, so no verdict is claimed. */
 async function confirmedRun(world: SeedWorld, date: string, seeds: readonly ParcelSeed[]): Promise<Run> {
-  const coordinator = await actorOf(world, 'coordinator@example.org');
+  const coordinator = await actorOf(world, driver);
   const entered = world.at(localInstant(addDays(date, -6), 19 * 60, world.zone));
   const span = { readyFrom: addDays(date, -3), latestDate: addDays(date, 9) };
   const parcels: Parcel[] = [];
@@ -109,8 +106,6 @@ async function setConfirmed(deps: Deps, coordinator: Actor, run: Run): Promise<v
     text: `Confirmed with ${run.parcels.length} parcels.`,
   });
 }
-
-const driverOf = (world: SeedWorld, _run: Run): Promise<Actor> => actorOf(world, 'coordinator@example.org');
 
 async function report(
   world: SeedWorld,

@@ -4,6 +4,7 @@ import type { Actor } from '../api/src/http/actor';
 import { addDays } from '../shared/src/calendar/add-days';
 import { blackoutCalendar } from '../shared/src/calendar/blackout-calendar';
 import { isWorkingDay } from '../shared/src/calendar/is-working-day';
+import { counterPlace } from '../shared/src/calendar/work-place';
 import { buyers } from './circle-people';
 import type { ParcelSeed } from './circle-parcels';
 import type { SeededPlaces } from './seed-places';
@@ -58,10 +59,7 @@ export async function enterParcel(
 
 /** Whether an overnight parcel can go from the circle's counter on a date and be handed out the day after. */
 export async function isShipDay({ deps, places }: SeedWorld, date: string): Promise<boolean> {
-  const { id: counterId, ...counter } = await deps.services.places.counter(
-    known(places.counters, 'San Antonio'),
-  );
-  const place = { ...counter, counterId };
+  const place = counterPlace(await deps.services.places.counter(known(places.counters, 'San Antonio')));
   const calendar = blackoutCalendar(await deps.services.blackouts.all(), date, addDays(date, 1));
   return isWorkingDay(place, date, calendar) && isWorkingDay(place, addDays(date, 1), calendar);
 }

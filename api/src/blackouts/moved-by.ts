@@ -2,6 +2,7 @@ import type { Blackout, BlackoutPreview, Counter, Parcel } from '@shared/contrac
 import { addDays } from '@shared/calendar/add-days';
 import { blackoutCalendar, type BlackoutRule } from '@shared/calendar/blackout-calendar';
 import { dayOff, type WorkPlace } from '@shared/calendar/is-working-day';
+import { counterPlace, doorPlace } from '@shared/calendar/work-place';
 import { contentsText } from '@shared/parcels/contents-text';
 import { longDate } from '@shared/parcels/long-date';
 import type { Deps } from '../deps';
@@ -14,7 +15,6 @@ export interface Moved {
 
 /** Parcels whose day a new calendar can still take away; what is aboard goes with its run. */
 const movable = ['booked', 'packed'] as const;
-const mondayToFriday = [1, 2, 3, 4, 5];
 
 /**
  * The booked and packed parcels that lose their ship day or their arrival day when the blackouts `now` become `then`. A day
@@ -60,27 +60,14 @@ function loss(
     const why = dayOff(place, date, calendars.then);
     return why?.why === 'blackout' ? why.title : null;
   };
-  const atOrigin = off(workOf(origin), shipDate);
+  const atOrigin = off(counterPlace(origin), shipDate);
   if (atOrigin !== null) return `${longDate(shipDate)} is closed for shipping: ${atOrigin}.`;
   const hold = destination.counterId === null ? undefined : counters.get(destination.counterId);
-  const door = {
-    workingDays: mondayToFriday,
-    carrierId: origin.carrierId,
-    state: destination.state,
-    counterId: null,
-  };
-  const atEnd = off(hold ? workOf(hold) : door, arrivalDate);
+  const atEnd = off(hold ? counterPlace(hold) : doorPlace(origin.carrierId, destination.state), arrivalDate);
   return atEnd === null
     ? null
     : `${longDate(arrivalDate)}, its arrival, is closed at ${destination.name}: ${atEnd}.`;
 }
-
-const workOf = ({ workingDays, carrierId, state, id }: Counter): WorkPlace => ({
-  workingDays,
-  carrierId,
-  state,
-  counterId: id,
-});
 
 /** What the page shows before saving: the days concerned, the parcels, the runs they leave, the people who would be told. */
 export async function previewOf(

@@ -3,7 +3,7 @@ import type { Point } from './problem';
 /** Mean Earth radius of IUGG (R1 = 6371.0088 km, Moritz 2000). */
 const earthRadiusKm = 6371.0088;
 /** The international mile, exact. */
-const kmPerMile = 1.609344;
+export const kmPerMile = 1.609344;
 
 /**
  * Speeds by how far into a leg one is, in miles an hour: streets first, then county roads, then highways. Assumptions

@@ -8,6 +8,7 @@ import { isoWeekday } from '../calendar/iso-weekday';
 import { localInstant } from '../calendar/local-instant';
 import { slackDays } from '../calendar/slack-days';
 import { startOfLocalDay } from '../calendar/start-of-local-day';
+import { counterPlace, doorPlace } from '../calendar/work-place';
 import { contentsLimits, type ContentsLimits } from './contents-limits';
 import type { DayQuestion } from './day-question';
 import { placeWeather, type PlaceWeather } from './place-weather';
@@ -54,7 +55,6 @@ export interface DayFacts extends DayQuestion {
 const hour = 60;
 /** The sort hub's night, whose weather and alerts count. Assumption; the hub is left well before 06:00 (design 5.2). */
 const hubNight = { fromMinute: 20 * hour, toMinute: 6 * hour };
-const mondayToFriday = [1, 2, 3, 4, 5];
 
 /** Works out what all checks of one ship day share. Throws RangeError when the calendar does not reach far enough. */
 export function dayFacts(question: DayQuestion): DayFacts {
@@ -78,12 +78,7 @@ export function dayFacts(question: DayQuestion): DayFacts {
     leadDays: daysBetween(today, shipDate),
     arrivalDate,
     arrivalAtMs,
-    originWork: {
-      workingDays: origin.workingDays,
-      carrierId: origin.carrierId,
-      state: origin.state,
-      counterId: origin.id,
-    },
+    originWork: counterPlace(origin),
     destinationWork: to.work,
     destinationName: to.name,
     destinationCity: to.city,
@@ -100,16 +95,10 @@ export function dayFacts(question: DayQuestion): DayFacts {
 function destinationFacts({ destination, origin, shipDate, policy: { journey } }: DayQuestion) {
   if (destination.kind === 'hold') {
     const { counter } = destination;
-    const work = {
-      workingDays: counter.workingDays,
-      carrierId: counter.carrierId,
-      state: counter.state,
-      counterId: counter.id,
-    };
     const { openingHours, commitMinute } = counter;
     const weekday = String(isoWeekday(addDays(shipDate, 1))) as keyof typeof openingHours;
     return {
-      work,
+      work: counterPlace(counter),
       name: counter.name,
       city: counter.city,
       zone: counter.zone,
@@ -119,15 +108,9 @@ function destinationFacts({ destination, origin, shipDate, policy: { journey } }
     };
   }
   const { door } = destination;
-  const work = {
-    workingDays: mondayToFriday,
-    carrierId: origin.carrierId,
-    state: door.state,
-    counterId: null,
-  };
   const byMinute = journey.truckUntilMinute;
   return {
-    work,
+    work: doorPlace(origin.carrierId, door.state),
     name: door.name,
     city: door.city,
     zone: door.zone,

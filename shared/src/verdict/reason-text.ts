@@ -1,5 +1,6 @@
 import { DateTime } from 'luxon';
 import type { Reason } from '../contract/days';
+import { chanceText } from './chance-text';
 
 type Values = Reason['values'];
 type Draft = Omit<Reason, 'text'>;
@@ -108,16 +109,8 @@ function boxWhere(v: Values): string {
   return `${where[text(v, 'leg')] ?? `in ${place}`} at ${hour(v)}`;
 }
 
-/** "in 97 of 100 forecasts like this one". */
-function outOfHundred(v: Values): string {
-  const chance = number(v, 'chance');
-  if (chance > 0.995) return 'in more than 99 of 100 forecasts like this one';
-  if (chance < 0.005) return 'in fewer than 1 of 100 forecasts like this one';
-  return `in ${Math.round(chance * 100)} of 100 forecasts like this one`;
-}
-
 const keeps = (v: Values): string =>
-  `it keeps within ${degrees(v, 'lowF')} and ${degrees(v, 'highF')} ${outOfHundred(v)}`;
+  `it keeps within ${degrees(v, 'lowF')} and ${degrees(v, 'highF')} ${chanceText(number(v, 'chance'))}`;
 const turns = (v: Values): string =>
   `${text(v, 'side') === 'low' ? 'falls' : 'rises'} to ${degrees(v, 'tempF')}`;
 

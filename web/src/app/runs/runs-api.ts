@@ -1,4 +1,4 @@
-import { HttpClient, HttpHeaders } from '@angular/common/http';
+import { HttpClient } from '@angular/common/http';
 import { inject, Injectable } from '@angular/core';
 import type { Observable } from 'rxjs';
 import type {
@@ -10,6 +10,7 @@ import type {
   RunPatch,
   RunPreview,
 } from '@shared/contract';
+import { onVersion } from '../ui/save-state';
 
 /** One parcel's tracking number, as it is written down at the counter. */
 export interface TrackingEntry {
@@ -71,8 +72,4 @@ export class RunsApi {
   callOff(run: Run, reason: string): Observable<Run> {
     return this.http.post<Run>(`/api/runs/${run.id}/call-off`, { reason }, onVersion(run));
   }
-}
-
-function onVersion(run: Run): { headers: HttpHeaders } {
-  return { headers: new HttpHeaders({ 'If-Match': `"${run.version}"` }) };
 }
