@@ -1,5 +1,10 @@
 import { addDays } from '@shared/calendar/add-days';
 import { blackoutCalendar } from '@shared/calendar/blackout-calendar';
+import { judgeBox } from '@shared/thermal/judge-box';
+import { normalCdf } from '@shared/thermal/chance';
+import { packsToTry } from '@shared/verdict/checks/pack-check';
+import { sigmaF } from '@shared/verdict/checks/rail-check';
+import { dayFacts } from '@shared/verdict/day-facts';
 import { stripDays } from '@shared/verdict/day-verdict';
 import type { RouteQuestion } from '@shared/verdict/day-question';
 import {
@@ -21,38 +26,68 @@ const zones = [
   'America/Phoenix',
   'America/Los_Angeles',
 ];
-/** Steps of a planned journey of 24 h and of the two late ones of 48 h, each for two packs: what the bare loop does. */
-const stepsOfADay = 2 * (27 + 2 * 51);
+const from = '2026-12-01';
+const against = 'a bare typed-array loop of the same box steps, exponentials and chances';
 
-/** Verdicts of many parcels over fourteen days, beside a bare typed-array loop over as many exponential steps. */
+/**
+ * Verdicts of many parcels over fourteen days (`seconds`: calendar, rails, box, sentences), and of these the box alone
+ * (`engineSeconds`: every pack, planned and late), each beside a bare loop that does the arithmetic of the box.
+ */
 export function verdicts(): Promise<BenchLine[]> {
   const lines: BenchLine[] = [];
   for (const size of [500, 2000, 8000]) {
     const questions = manyQuestions(size);
+    const dates: string[][] = [];
     const started = performance.now();
-    let judged = 0;
-    for (const question of questions) judged += stripDays(question, '2026-12-01', days).length;
+    for (const question of questions)
+      dates.push(
+        stripDays(question, from, days).flatMap(({ date, chance }) => (chance === null ? [] : [date])),
+      );
     const seconds = (performance.now() - started) / 1000;
-    if (judged !== size * days) throw new Error('Some days were not judged.');
-    const bare = bareLoop(size);
-    lines.push({
+    const megabytes = Math.round(process.memoryUsage().rss / 1e6);
+    const { engine, works } = engineAlone(questions, dates);
+    const bare = bareLoop(works);
+    const line = (metric: string, value: number): BenchLine => ({
       bench: 'verdicts',
       size,
-      metric: 'seconds',
-      value: round(seconds),
+      metric,
+      value: round(value),
       unit: 's',
-      ratio: round(seconds / bare),
-      against: 'a bare typed-array loop of as many box steps',
+      ratio: round(value / bare),
+      against,
     });
-    lines.push({
-      bench: 'verdicts',
-      size,
-      metric: 'megabytes',
-      value: Math.round(process.memoryUsage().rss / 1e6),
-      unit: 'MB',
-    });
+    lines.push(line('seconds', seconds), line('engineSeconds', engine));
+    lines.push({ bench: 'verdicts', size, metric: 'megabytes', value: megabytes, unit: 'MB' });
   }
   return Promise.resolve(lines);
+}
+
+/** What was worked out for one parcel and day: how many packs, through which journeys. */
+interface Work {
+  readonly packs: number;
+  readonly journeys: readonly Float64Array[];
+}
+
+/** The box alone, on the days whose weather is known; what the checks find out before is not timed. */
+function engineAlone(questions: readonly RouteQuestion[], dates: readonly string[][]) {
+  const works: Work[] = [];
+  let engine = 0;
+  questions.forEach((question, index) => {
+    const asks = (dates[index] ?? []).map((shipDate) => {
+      const facts = dayFacts({ ...question, shipDate });
+      return { question: facts, limits: facts.limits, packs: packsToTry(facts), sigmaF: sigmaF(facts) };
+    });
+    const started = performance.now();
+    const judged = asks.map(judgeBox);
+    engine += (performance.now() - started) / 1000;
+    judged.forEach(({ nominal, late }, day) => {
+      // The late way that is not kept is as long as the one that is.
+      const journeys = late ? [nominal.atMs, late.run.atMs, late.run.atMs] : [nominal.atMs];
+      works.push({ packs: asks[day]?.packs.length ?? 0, journeys });
+    });
+  });
+  if (works.length < questions.length) throw new Error('Hardly a day has known weather.');
+  return { engine, works };
 }
 
 function manyQuestions(size: number): RouteQuestion[] {
@@ -65,7 +100,7 @@ function manyQuestions(size: number): RouteQuestion[] {
       at: (hour) => 45 + (index % 20) + 12 * Math.sin((Date.parse(hour) / 3_600_000 / 24) * 2 * Math.PI),
     }),
   );
-  const calendar = blackoutCalendar([], addDays('2026-12-01', -2), addDays('2026-12-01', 60));
+  const calendar = blackoutCalendar([], addDays(from, -2), addDays(from, 60));
   return Array.from({ length: size }, (_, index): RouteQuestion => {
     const counter = counters[index % places] ?? texas;
     return {
@@ -78,24 +113,38 @@ function manyQuestions(size: number): RouteQuestion[] {
   });
 }
 
-/** Seconds that a plain loop takes for the same number of steps of the exact solution. */
-function bareLoop(size: number): number {
+/** Seconds that plain loops take for as many steps of the exact solution, responses, fits into a band and chances. */
+function bareLoop(works: readonly Work[]): number {
   const air = Float64Array.from({ length: 512 }, (_, index) => 5 + Math.sin(index));
-  const out = new Float64Array(stepsOfADay);
+  const [temps, response, decays] = [new Float64Array(512), new Float64Array(512), new Float64Array(512)];
   const started = performance.now();
   let sum = 0;
-  // Days beyond the forecast have no journey: about half of the fourteen.
-  for (let day = 0; day < size * (days / 2); day += 1) {
-    let tempC = 23;
+  works.forEach(({ packs, journeys }, day) => {
     const tau = 2800 + (day % 7);
-    for (let step = 0; step < stepsOfADay; step += 1) {
-      const from = air[(day + step) & 511] ?? 0;
-      const slope = ((air[(day + step + 1) & 511] ?? 0) - from) / 3600;
-      tempC = from + slope * (3600 - tau) + (tempC - from + slope * tau) * Math.exp(-3600 / tau);
-      out[step] = tempC;
+    for (const atMs of journeys) {
+      const steps = atMs.length - 1;
+      for (let step = 0; step < steps; step += 1) {
+        const decay = Math.exp(((atMs[step] ?? 0) - (atMs[step + 1] ?? 0)) / 1000 / tau);
+        decays[step] = decay;
+        response[step + 1] = 0.5 + ((response[step] ?? 0) - 0.5) * decay;
+      }
+      for (let pack = 0; pack < packs; pack += 1) {
+        let tempC = 23;
+        let [least, most] = [-Infinity, Infinity];
+        for (let step = 0; step < steps; step += 1) {
+          const seconds = ((atMs[step + 1] ?? 0) - (atMs[step] ?? 0)) / 1000;
+          const a = (air[(day + step) & 511] ?? 0) + pack;
+          const slope = ((air[(day + step + 1) & 511] ?? 0) + pack - a) / seconds;
+          tempC = a + slope * (seconds - tau) + (tempC - a + slope * tau) * (decays[step] ?? 0);
+          temps[step + 1] = tempC;
+          const felt = response[step + 1] ?? 1;
+          least = Math.max(least, (15 - tempC) / felt);
+          most = Math.min(most, (30 - tempC) / felt);
+        }
+        sum += normalCdf(most / 4) - normalCdf(least / 4) + (temps[steps] ?? 0);
+      }
     }
-    sum += out[stepsOfADay - 1] ?? 0;
-  }
+  });
   if (!Number.isFinite(sum)) throw new Error('The bare loop went astray.');
   return (performance.now() - started) / 1000;
 }

@@ -6,7 +6,15 @@ import { boxModel } from './box-model';
 import { chanceOfFit, fitBand, type BandFit } from './chance';
 import { journeyLegs, lateLegs, type Leg, type PlaceRole } from './journey';
 import { outdoorHours, type OutdoorHours } from './outdoor-hours';
-import { boxTemps, journeySteps, responseOf, type BoxRun, type JourneySteps } from './simulate';
+import {
+  boxTemps,
+  decaysOf,
+  journeySteps,
+  responseOf,
+  sharedRoom,
+  type BoxRun,
+  type JourneySteps,
+} from './simulate';
 import { ThermalError } from './thermal-error';
 
 /** The air in the box for a ship day, with the pack that suits best, and how sure that is. */
@@ -46,24 +54,31 @@ export function judgeBox({ question, limits, packs, sigmaF }: BoxAsk): BoxJudgem
   const model = boxModel(box, massG, policy.boxModel);
   const way = wayOf(question);
   const consts = { heat: policy.heatPack, cold: policy.coldPack };
-  const response = responseOf(model, way.steps);
-  const run = (steps: JourneySteps, pack: Pack, felt: Float64Array): BoxRun => ({
+  const points = [way, ...way.late].reduce((sum, { steps }) => sum + steps.atMs.length, 0);
+  // Decays, responses and one run for each pack.
+  const room = sharedRoom(points * (2 + packs.length));
+  const feel = (steps: JourneySteps): FeltWay => {
+    const decays = decaysOf(model, steps, room);
+    return { steps, decays, response: responseOf(steps, decays, room) };
+  };
+  const run = ({ steps, decays, response }: FeltWay, pack: Pack): BoxRun => ({
     atMs: steps.atMs,
-    tempF: boxTemps(model, steps, pack, consts, policy.boxModel.startF),
-    response: felt,
+    tempF: boxTemps(model, steps, decays, pack, consts, policy.boxModel.startF, room),
+    response,
     legs: steps.legOf,
   });
+  const planned = feel(way.steps);
   const band = { lowF: limits.bandLowF, highF: limits.bandHighF };
   const endurance = { lowF: limits.enduranceLowF, highF: limits.enduranceHighF };
-  const lateWays = way.late.map((one) => ({ ...one, response: responseOf(model, one.steps) }));
+  const lateWays = way.late.map(({ where, steps }) => ({ where, felt: feel(steps) }));
   let best: BoxJudgement | null = null;
   for (const pack of packs) {
-    const nominal = run(way.steps, pack, response);
+    const nominal = run(planned, pack);
     const fit = fitBand(nominal, band);
     const chance = chanceOfFit(fit, sigmaF);
     let late: BoxJudgement['late'] = null;
     for (const one of lateWays) {
-      const lateRun = run(one.steps, pack, one.response);
+      const lateRun = run(one.felt, pack);
       const lateFit = fitBand(lateRun, endurance);
       const lateChance = chanceOfFit(lateFit, sigmaF);
       if (late === null || lateChance < late.chance)
@@ -81,12 +96,20 @@ function isBetter(one: BoxJudgement, than: BoxJudgement): boolean {
   return (one.late?.chance ?? 0) > (than.late?.chance ?? 0) + tie;
 }
 
+/** A journey as one box feels it. */
+interface FeltWay {
+  readonly steps: JourneySteps;
+  readonly decays: Float64Array;
+  readonly response: Float64Array;
+}
+
 interface Way {
   readonly steps: JourneySteps;
   readonly late: readonly { readonly where: 'hub' | 'destination'; readonly steps: JourneySteps }[];
 }
 
-// Parcels on one route and day have the same air round them, whatever is in the box. The key holds all that it rests on.
+// Parcels on one route and day have the same air round them, whatever is in the box. The key and `of` hold all that it rests on.
+// Kept by destination: a circle sends from few counters to very many, and one map for all of them would overflow at each look.
 const ways = new WeakMap<
   OutdoorForecast,
   Map<string, { readonly of: readonly unknown[]; readonly way: Way }>
@@ -99,17 +122,17 @@ function wayOf(question: DayQuestion): Way {
     throw new ThermalError('no-forecast', 'A place of the route has no forecast.');
   const end = destination.kind === 'hold' ? destination.counter : destination.door;
   const of = [
+    weather.origin,
     weather.hub,
-    weather.destination,
     origin,
     hub,
     end,
     policy.journey,
     policy.packedBeforeCutOffMinutes,
   ];
-  const known = ways.get(weather.origin) ?? new Map<string, { of: readonly unknown[]; way: Way }>();
-  ways.set(weather.origin, known);
-  const key = `${shipDate} ${destination.kind} ${end.name} ${end.city}`;
+  const known = ways.get(weather.destination) ?? new Map<string, { of: readonly unknown[]; way: Way }>();
+  ways.set(weather.destination, known);
+  const key = `${shipDate} ${origin.id} ${hub.id} ${destination.kind} ${end.name} ${end.city}`;
   const there = known.get(key);
   if (there?.of.every((one, index) => one === of[index])) return there.way;
   const way = makeWay(question, {

@@ -98,24 +98,59 @@ function roundBoxC(leg: Leg, outdoorC: number): number {
  */
 export function simulate({ model, legs, outdoor, pack, packs, startF }: BoxQuestion): BoxRun {
   const steps = journeySteps(legs, outdoor);
+  const decays = decaysOf(model, steps);
   return {
     atMs: steps.atMs,
-    tempF: boxTemps(model, steps, pack, packs, startF),
-    response: responseOf(model, steps),
+    tempF: boxTemps(model, steps, decays, pack, packs, startF),
+    response: responseOf(steps, decays),
     legs: steps.legOf,
   };
+}
+
+/** Gives room for so many numbers, all 0. */
+export type Room = (length: number) => Float64Array;
+const ownRoom: Room = (length) => new Float64Array(length);
+
+/**
+ * Room for many short rows in one piece of memory; a row that no longer fits gets its own. An array of its own costs more than
+ * stepping a box through it.
+ */
+export function sharedRoom(total: number): Room {
+  const buffer = new ArrayBuffer(total * Float64Array.BYTES_PER_ELEMENT);
+  let used = 0;
+  return (length) => {
+    if (used + length > total) return ownRoom(length);
+    const row = new Float64Array(buffer, used * Float64Array.BYTES_PER_ELEMENT, length);
+    used += length;
+    return row;
+  };
+}
+
+/** What is left of a difference to the air after each step: exp(−Δt / τ). All packs of a box and its response share them. */
+export function decaysOf(
+  { uaWPerK, heatJPerK }: BoxModel,
+  { atMs }: JourneySteps,
+  room = ownRoom,
+): Float64Array {
+  const tau = heatJPerK / uaWPerK;
+  const decays = room(Math.max(0, atMs.length - 1));
+  for (let step = 0; step < decays.length; step += 1)
+    decays[step] = Math.exp(((atMs[step] ?? 0) - (atMs[step + 1] ?? 0)) / 1000 / tau);
+  return decays;
 }
 
 /** The air in the box at each point, °F. */
 export function boxTemps(
   model: BoxModel,
   steps: JourneySteps,
+  decays: Float64Array,
   pack: Pack,
   packs: Packs,
   startF: number,
+  room = ownRoom,
 ): Float64Array {
   const { atMs, fromC, toC: untilC } = steps;
-  const tempF = new Float64Array(atMs.length);
+  const tempF = room(atMs.length);
   let tempC = toC(startF);
   tempF[0] = startF;
   const power = heatPower(pack, packs.heat);
@@ -129,18 +164,19 @@ export function boxTemps(
     const seconds = ((atMs[step + 1] ?? 0) - originMs) / 1000 - start;
     const a = fromC[step] ?? 0;
     const slope = ((untilC[step] ?? 0) - a) / seconds;
+    const decay = decays[step] ?? 0;
     tempC =
       power !== null
-        ? heated(model, tempC, a, slope, start, seconds, power)
+        ? heated(model, tempC, a, slope, start, seconds, decay, power)
         : ice.leftJ > 0
           ? cooled(model, tempC, a, slope, seconds, ice)
-          : relax(model.uaWPerK, model.heatJPerK, tempC, a, slope, 0, 0, seconds);
+          : relax(model.uaWPerK, model.heatJPerK, tempC, a, slope, 0, 0, seconds, decay);
     tempF[step + 1] = toF(tempC);
   }
   return tempF;
 }
 
-/** Exact solution over `seconds` for air a + slope·s and power p + rise·s. */
+/** Exact solution over `seconds`, of which `decay` is exp(−seconds / τ), for air a + slope·s and power p + rise·s. */
 function relax(
   ua: number,
   heat: number,
@@ -150,11 +186,12 @@ function relax(
   p: number,
   rise: number,
   seconds: number,
+  decay = Math.exp((-seconds * ua) / heat),
 ): number {
   const tau = heat / ua;
   const alpha = a + p / ua;
   const beta = slope + rise / ua;
-  return alpha + beta * (seconds - tau) + (from - alpha + beta * tau) * Math.exp(-seconds / tau);
+  return alpha + beta * (seconds - tau) + (from - alpha + beta * tau) * decay;
 }
 
 /** Bends of the power, in seconds from waking, and the power at each, W; null for no heat pack. */
@@ -177,6 +214,7 @@ function heated(
   slope: number,
   start: number,
   seconds: number,
+  decay: number,
   power: { at: readonly number[]; watts: readonly number[] },
 ): number {
   let tempC = from;
@@ -190,7 +228,9 @@ function heated(
     const rise =
       next < 0 || span === 0 ? 0 : ((power.watts[next] ?? 0) - (power.watts[next - 1] ?? 0)) / span;
     const watts = next < 0 ? 0 : (power.watts[next - 1] ?? 0) + rise * (now - before);
-    tempC = relax(uaWPerK, heatJPerK, tempC, a + slope * (now - start), slope, watts, rise, until - now);
+    const airC = a + slope * (now - start);
+    const whole = now === start && until === end ? decay : undefined;
+    tempC = relax(uaWPerK, heatJPerK, tempC, airC, slope, watts, rise, until - now, whole);
     now = until;
   }
   return tempC;
@@ -206,28 +246,40 @@ function cooled(
   ice: { leftJ: number; wPerK: number },
 ): number {
   let tempC = from;
-  // Short parts keep the melted heat exact to well under a percent and find the moment the ice is gone.
-  const parts = Math.max(1, Math.round(seconds / 300));
-  const part = seconds / parts;
-  for (let index = 0; index < parts; index += 1) {
-    const airC = a + slope * part * index;
+  // Short parts keep the melted heat exact to well under a percent; the one in which the ice ends is cut there.
+  const longest = seconds / Math.max(1, Math.round(seconds / 300));
+  let now = 0;
+  while (now < seconds - 1e-6) {
+    let part = Math.min(longest, seconds - now);
+    const airC = a + slope * now;
     const k = ice.leftJ > 0 && tempC > 0 ? ice.wPerK : 0;
     const ua = uaWPerK + k;
-    const next = relax(ua, heatJPerK, tempC, (uaWPerK * airC) / ua, (uaWPerK * slope) / ua, 0, 0, part);
-    if (k > 0) ice.leftJ -= k * Math.max(0, (tempC + next) / 2) * part;
+    const after = (length: number) =>
+      relax(ua, heatJPerK, tempC, (uaWPerK * airC) / ua, (uaWPerK * slope) / ua, 0, 0, length);
+    let next = after(part);
+    const meltedJ = k * Math.max(0, (tempC + next) / 2) * part;
+    if (meltedJ > ice.leftJ) {
+      part *= ice.leftJ / meltedJ;
+      next = after(part);
+    }
+    ice.leftJ = Math.max(0, ice.leftJ - meltedJ);
     tempC = next;
+    now += part;
   }
   return tempC;
 }
 
 /** How far the box's air has moved at each point for one degree more in every outdoor value: the same model without power. */
-export function responseOf({ uaWPerK, heatJPerK }: BoxModel, { atMs, exposure }: JourneySteps): Float64Array {
-  const response = new Float64Array(atMs.length);
+export function responseOf(
+  { atMs, exposure }: JourneySteps,
+  decays: Float64Array,
+  room = ownRoom,
+): Float64Array {
+  const response = room(atMs.length);
   let moved = 0;
-  for (let step = 0; step + 1 < atMs.length; step += 1) {
-    const seconds = ((atMs[step + 1] ?? 0) - (atMs[step] ?? 0)) / 1000;
+  for (let step = 0; step < decays.length; step += 1) {
     const air = exposure[step] ?? 0;
-    moved = air + (moved - air) * Math.exp((-seconds * uaWPerK) / heatJPerK);
+    moved = air + (moved - air) * (decays[step] ?? 0);
     response[step + 1] = moved;
   }
   return response;

@@ -33,13 +33,15 @@ export function placeWeather(forecast: OutdoorForecast): PlaceWeather {
   if (known) return known;
   const days = new Map<string, LocalDayRange | null>();
   const windows = new Map<string, Extremes | null>();
+  const gaps = new Map<string, number>();
   const weather: PlaceWeather = {
     forecast,
     issuedMs: Date.parse(forecast.issuedAt),
     coverageEndMs: coverageEnd(forecast),
     day: (date) => remember(days, date, () => localDayRange(forecast, date)),
     window: (fromMs, toMs) => remember(windows, `${fromMs} ${toMs}`, () => extremes(forecast, fromMs, toMs)),
-    longestGapHours: (fromMs, toMs) => longestGap(forecast, fromMs, toMs),
+    longestGapHours: (fromMs, toMs) =>
+      remember(gaps, `${fromMs} ${toMs}`, () => longestGap(forecast, fromMs, toMs)),
   };
   bucketed.set(forecast, weather);
   return weather;
