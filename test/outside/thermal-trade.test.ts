@@ -154,6 +154,52 @@ describe('a verdict that others of the same route and day have paved', () => {
     );
   });
 
+  const wave = (zone: string, shift: number) =>
+    sampleForecast(zone, now, 55, {
+      at: (hour, usual) => usual + 12 * Math.sin((2 * Math.PI * Date.parse(hour)) / 86_400_000 + shift),
+    });
+  const base = sampleQuestion({
+    weather: { origin: wave('America/Chicago', 0), hub: wave('UTC', 1), destination: wave('UTC', 2) },
+  });
+  const closed = sampleQuestion({
+    blackouts: [
+      {
+        title: 'Inventory day',
+        kind: 'date',
+        startDate: '2026-12-04',
+        endDate: null,
+        rules: null,
+        liftedDates: [],
+        scope: 'everywhere',
+        carrierId: null,
+        state: null,
+        counterId: null,
+      },
+    ],
+  });
+  const { policy } = base;
+  it.each<[string, Partial<DayQuestion>]>([
+    ['the hour of asking', { now: '2026-12-02T09:00:00.000Z' }],
+    ['the origin', { origin: { ...base.origin, workingDays: [1, 2, 4, 5] } }],
+    ['the sort hub', { hub: { ...base.hub, zone: 'Pacific/Honolulu' } }],
+    ['the policy', { policy: { ...policy, journey: { ...policy.journey, heldMinutes: 3600 } } }],
+    ['the calendar', { calendar: closed.calendar }],
+    ['the weather at the origin', { weather: { ...base.weather, origin: wave('UTC', 3) } }],
+    ['the weather at the hub', { weather: { ...base.weather, hub: wave('UTC', 4) } }],
+    ['the weather at the destination', { weather: { ...base.weather, destination: wave('UTC', 5) } }],
+  ])('is worked out anew when %s changes', (_, change) => {
+    const before = dayVerdict(base, { trace: true });
+    const changed = { ...base, ...change };
+    const after = dayVerdict(changed, { trace: true });
+    expect(after).not.toEqual(before);
+    const unseen = { ...changed, destination: { kind: 'hold' as const, counter: { ...phoenix } } };
+    const weather = {
+      ...changed.weather,
+      destination: changed.weather.destination && { ...changed.weather.destination },
+    };
+    expect(after).toEqual(dayVerdict({ ...unseen, weather }, { trace: true }));
+  });
+
   it('keeps its trace when the next parcel of the route is judged', () => {
     const question = sampleQuestion({ weather: weatherOf(60, 50, 60) });
     const facts = dayFacts(question);
