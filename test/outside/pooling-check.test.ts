@@ -25,7 +25,7 @@ const confirmed = {
   coordinatorId: 500,
   date: monday,
   counterId: 900,
-  breederIds: [2],
+  stopIds: [2],
   volumeL: 30,
 } as const;
 
@@ -44,18 +44,18 @@ const broken: readonly Broken[] = [
     code: 'day-not-safe',
     what: 'ships on a day that is not safe',
     problem: {
-      parcels: [parcel(1, { days: [{ date: tuesday, penaltyCents: 0 }] }), parcel(2, { breederId: 2 })],
+      parcels: [parcel(1, { days: [{ date: tuesday, penaltyCents: 0 }] }), parcel(2, { stopId: 2 })],
     },
   },
   {
     code: 'wrong-counter',
     what: 'takes a parcel to a counter it was not judged for',
-    problem: { parcels: [parcel(1, { counterId: 901 }), parcel(2, { breederId: 2 })] },
+    problem: { parcels: [parcel(1, { counterId: 901 }), parcel(2, { stopId: 2 })] },
   },
   {
     code: 'breeder-away',
     what: 'calls at somebody who is away',
-    problem: { breeders: [breeder(1, { daysAway: [monday] }), breeder(2)] },
+    problem: { stops: [breeder(1, { daysAway: [monday] }), breeder(2)] },
   },
   {
     code: 'pin-broken',
@@ -66,7 +66,7 @@ const broken: readonly Broken[] = [
   {
     code: 'idle-stop',
     what: 'stops where nothing waits',
-    problem: { breeders: [breeder(1), breeder(2), breeder(3)] },
+    problem: { stops: [breeder(1), breeder(2), breeder(3)] },
     plan: withRun({ order: [1, 2, 3] }),
   },
   { code: 'stop-twice', what: 'stops twice at one place', plan: withRun({ order: [1, 2, 1] }) },
@@ -86,14 +86,14 @@ const broken: readonly Broken[] = [
     what: 'overloads a vehicle that is loaded already',
     problem: {
       fixedRuns: [{ ...confirmed, volumeL: 60.5 }],
-      parcels: [parcel(1), parcel(2, { breederId: 2 })],
+      parcels: [parcel(1), parcel(2, { stopId: 2 })],
     },
     plan: withRun({ runId: 77 }),
   },
   {
     code: 'window',
     what: 'comes after a window has closed',
-    problem: { breeders: [breeder(1, { windowOpenMinute: 540, windowCloseMinute: 600 }), breeder(2)] },
+    problem: { stops: [breeder(1, { windowOpenMinute: 540, windowCloseMinute: 600 }), breeder(2)] },
   },
   {
     code: 'cut-off',
@@ -114,7 +114,7 @@ const broken: readonly Broken[] = [
   {
     code: 'too-long',
     what: 'waits so long that it is too long',
-    problem: { breeders: [breeder(1, { windowOpenMinute: 800 }), breeder(2, { windowCloseMinute: 1000 })] },
+    problem: { stops: [breeder(1, { windowOpenMinute: 800 }), breeder(2, { windowCloseMinute: 1000 })] },
     plan: withRun({ departMinute: 500 }),
   },
   { code: 'too-early', what: 'leaves before now', problem: { earliestMinutes: { [monday]: 601 } } },

@@ -22,7 +22,7 @@ const confirmed = {
   coordinatorId: 500,
   date: monday,
   counterId: 900,
-  breederIds: [2],
+  stopIds: [2],
   volumeL: 30,
 };
 
@@ -58,18 +58,18 @@ describe('why a parcel stays behind', () => {
   });
 
   it('the breeder is away on the day', () => {
-    const left = only(plan({ breeders: [breeder(1, { daysAway: [monday] }), breeder(2)] }), 1);
+    const left = only(plan({ stops: [breeder(1, { daysAway: [monday] }), breeder(2)] }), 1);
     expect(left).toMatchObject({ reason: 'no-safe-day', text: 'Breeder 1 is away on Mon, Dec 7.' });
   });
 
   it('nobody knows where the breeder lives', () => {
-    const left = only(plan({ breeders: [breeder(2)] }), 1);
+    const left = only(plan({ stops: [breeder(2)] }), 1);
     expect(left.reason).toBe('no-driver');
     expect(left.text).toContain('not known');
   });
 
   it('there is no room, and how much is lacking', () => {
-    const parcels = [parcel(1, { volumeL: 60 }), parcel(2, { breederId: 2, volumeL: 55.3 })];
+    const parcels = [parcel(1, { volumeL: 60 }), parcel(2, { stopId: 2, volumeL: 55.3 })];
     const result = plan({ parcels });
     expect(result.unplaced).toHaveLength(1);
     const [left] = result.unplaced;
@@ -87,13 +87,13 @@ describe('why a parcel stays behind', () => {
 
   it('nobody could be at the counter in time', () => {
     const late = breeder(1, { windowOpenMinute: 985, windowCloseMinute: 1200 });
-    expect(only(plan({ breeders: [late, breeder(2)] }), 1).reason).toBe('too-late');
+    expect(only(plan({ stops: [late, breeder(2)] }), 1).reason).toBe('too-late');
   });
 
   it('the run cannot make one more stop in time', () => {
     // Each alone can be met; both windows are the same minute at two places.
     const at = { windowOpenMinute: 600, windowCloseMinute: 600 };
-    const result = plan({ breeders: [breeder(1, at), breeder(2, at)] });
+    const result = plan({ stops: [breeder(1, at), breeder(2, at)] });
     expect(result.unplaced).toHaveLength(1);
     expect(result.unplaced[0]).toMatchObject({ reason: 'too-late' });
     expect(result.unplaced[0]?.text).toContain('one more stop');
@@ -101,7 +101,7 @@ describe('why a parcel stays behind', () => {
 
   it('the driver is bound for another counter', () => {
     const other = counter({ id: 901, name: 'Second counter' });
-    const parcels = [parcel(1), parcel(3), parcel(2, { breederId: 2, counterId: 901 })];
+    const parcels = [parcel(1), parcel(3), parcel(2, { stopId: 2, counterId: 901 })];
     const left = only(plan({ parcels, counters: [counter(), other] }), 2);
     expect(left.reason).toBe('no-driver');
     expect(left.text).toContain('another counter');

@@ -101,7 +101,7 @@ function holds(problem: PoolProblem, plan: ReturnType<typeof planOf>): void {
   expect(new Set(days).size).toBe(days.length);
   for (const run of plan.runs) {
     expect(faultsByHand(problem, run)).toEqual([]);
-    const stops = run.order.map((id) => found(problem.breeders, id));
+    const stops = run.order.map((id) => found(problem.stops, id));
     const driver = found(problem.coordinators, run.coordinatorId);
     const counter = found(problem.counters, run.counterId);
     const clock = timeline(driver, stops, counter, run.departMinute, problem.costs.circuity);
@@ -179,19 +179,17 @@ describe('the columns of the model', () => {
       expect(isSmall(instance)).toBe(true);
       const columns = allColumns(instance);
       for (const slot of instance.slots) {
-        const breeders = [...new Set(slot.eligible.map((at) => problem.parcels[at]?.breederId ?? -1))];
+        const breeders = [...new Set(slot.eligible.map((at) => problem.parcels[at]?.stopId ?? -1))];
         for (let mask = 1; mask < 1 << breeders.length; mask++) {
           const ids = breeders.filter((_, bit) => mask & (1 << bit)).sort((a, b) => a - b);
           const cents = Math.round(cheapestByHand(legsOf(problem, slot, ids))) + problem.costs.runFixedCents;
-          const column = columns.find(
-            (one) => one.slot === slot.index && one.breederIds.join() === ids.join(),
-          );
+          const column = columns.find((one) => one.slot === slot.index && one.stopIds.join() === ids.join());
           const least = ids.reduce(
             (sum, id) =>
               sum +
               Math.min(
                 ...slot.eligible.flatMap((at) =>
-                  problem.parcels[at]?.breederId === id ? [problem.parcels[at].volumeL] : [],
+                  problem.parcels[at]?.stopId === id ? [problem.parcels[at].volumeL] : [],
                 ),
               ),
             0,

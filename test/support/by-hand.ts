@@ -68,11 +68,11 @@ export function cheapestByHand(problem: SequenceProblem): number {
 }
 
 /** The legs of a run, laid out here and not by the program; distances are the program's own estimate. */
-export function legsOf(problem: PoolProblem, slot: Slot, breederIds: readonly number[]): SequenceProblem {
+export function legsOf(problem: PoolProblem, slot: Slot, stopIds: readonly number[]): SequenceProblem {
   const { costs } = problem;
   const driver = found(problem.coordinators, slot.coordinatorId);
   const counter = found(problem.counters, slot.counterId);
-  const stops = breederIds.map((id) => found(problem.breeders, id));
+  const stops = stopIds.map((id) => found(problem.stops, id));
   const leg = (a: { lat: number; lon: number }, b: { lat: number; lon: number }) => {
     const { miles, minutes } = estimateLeg(a, b, costs.circuity);
     return { minutes, cents: miles * driver.centsPerMile + minutes * costs.driverMinuteCents };

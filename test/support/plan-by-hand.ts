@@ -25,7 +25,7 @@ export function cheapestPlanByHand(problem: PoolProblem): number {
 
 function slotsFor(problem: PoolProblem, parcel: PoolParcel): Slot[] {
   const pin = problem.pins.find(({ parcelId }) => parcelId === parcel.id);
-  const { daysAway } = found(problem.breeders, parcel.breederId);
+  const { daysAway } = found(problem.stops, parcel.stopId);
   const counter = found(problem.counters, parcel.counterId);
   return parcel.days.flatMap(({ date }) =>
     problem.coordinators.flatMap((driver): Slot[] => {
@@ -63,7 +63,7 @@ function objective(
   for (const { slot, parcels } of runs.values()) {
     const loadL = parcels.reduce((sum, { volumeL }) => sum + volumeL, 0);
     if (loadL > found(problem.coordinators, slot.coordinatorId).capacityL) return Infinity;
-    const ids = [...new Set(parcels.map(({ breederId }) => breederId))].sort((a, b) => a - b);
+    const ids = [...new Set(parcels.map(({ stopId }) => stopId))].sort((a, b) => a - b);
     cents += problem.costs.runFixedCents + price(slot, ids);
   }
   return cents;
@@ -99,9 +99,9 @@ export function faultsByHand(problem: PoolProblem, run: DrivenRun): string[] {
     if (!parcel.days.some(({ date }) => date === run.date))
       faults.push(`parcel ${parcel.id}: not a safe day`);
     if (parcel.counterId !== run.counterId) faults.push(`parcel ${parcel.id}: wrong counter`);
-    if (found(problem.breeders, parcel.breederId).daysAway.includes(run.date))
+    if (found(problem.stops, parcel.stopId).daysAway.includes(run.date))
       faults.push(`parcel ${parcel.id}: the breeder is away`);
-    if (!run.order.includes(parcel.breederId)) faults.push(`parcel ${parcel.id}: not collected`);
+    if (!run.order.includes(parcel.stopId)) faults.push(`parcel ${parcel.id}: not collected`);
     const pin = problem.pins.find(({ parcelId }) => parcelId === parcel.id);
     if (
       pin &&

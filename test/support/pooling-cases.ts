@@ -1,4 +1,4 @@
-import type { FixedRun, Pin, PoolBreeder, PoolParcel, PoolProblem } from '@shared/pooling/problem';
+import type { FixedRun, Pin, PoolStop, PoolParcel, PoolProblem } from '@shared/pooling/problem';
 
 /** A small linear congruential generator (Numerical Recipes constants): the same cases everywhere. */
 export function seeded(seed: number): () => number {
@@ -20,6 +20,9 @@ export interface CaseSize {
   readonly fixedRun?: boolean;
 }
 
+/** A parcel that is collected at its own breeder. */
+const at = (id: number) => ({ stopId: id, breederId: id });
+
 export const weekDays = ['2026-12-07', '2026-12-08', '2026-12-09'] as const;
 
 /** An invented circle round San Antonio in which rooms, windows and cut-offs bind now and then. */
@@ -29,7 +32,7 @@ export function poolCase(size: CaseSize): PoolProblem {
   const near = () => ({ lat: 29.4 + (random() - 0.5) * 0.9, lon: -98.5 + (random() - 0.5) * 1.1 });
   const chance = (share: number) => random() < share;
   const counterIds = Array.from({ length: size.counters ?? 1 }, (_, index) => 900 + index);
-  const breeders = Array.from({ length: size.breeders }, (_, index): PoolBreeder => {
+  const breeders = Array.from({ length: size.breeders }, (_, index): PoolStop => {
     const windowOpenMinute = 60 * between(7, 12);
     return {
       id: 100 + index,
@@ -44,7 +47,7 @@ export function poolCase(size: CaseSize): PoolProblem {
   const parcels = Array.from({ length: size.parcels }, (_, index): PoolParcel => ({
     id: index + 1,
     label: `P-${index + 1}`,
-    breederId: 100 + between(0, size.breeders - 1),
+    ...at(100 + between(0, size.breeders - 1)),
     counterId: counterIds[between(0, counterIds.length - 1)] ?? 900,
     volumeL: between(10, 60),
     days: size.dates
@@ -87,14 +90,14 @@ export function poolCase(size: CaseSize): PoolProblem {
             coordinatorId: first.id,
             date: size.dates[0] ?? '',
             counterId: 900,
-            breederIds: [100],
+            stopIds: [100],
             volumeL: 30,
           },
         ]
       : [];
   return {
     parcels,
-    breeders,
+    stops: breeders,
     coordinators,
     counters,
     fixedRuns: fixed,

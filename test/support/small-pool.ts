@@ -1,9 +1,9 @@
-import type { PoolBreeder, PoolParcel, PoolProblem } from '@shared/pooling/problem';
+import type { PoolStop, PoolParcel, PoolProblem } from '@shared/pooling/problem';
 
 export const monday = '2026-12-07';
 export const tuesday = '2026-12-08';
 
-export const breeder = (id: number, change: Partial<PoolBreeder> = {}): PoolBreeder => ({
+export const breeder = (id: number, change: Partial<PoolStop> = {}): PoolStop => ({
   id,
   name: `Breeder ${id}`,
   lat: 29.5,
@@ -18,7 +18,8 @@ export const breeder = (id: number, change: Partial<PoolBreeder> = {}): PoolBree
 export const parcel = (id: number, change: Partial<PoolParcel> = {}): PoolParcel => ({
   id,
   label: `P-${id}`,
-  breederId: 1,
+  stopId: 1,
+  breederId: change.stopId ?? 1,
   counterId: 900,
   volumeL: 20,
   days: [{ date: monday, penaltyCents: 0 }],
@@ -51,8 +52,8 @@ export const counter = (change: Partial<PoolProblem['counters'][number]> = {}) =
 
 /** Two breeders with a parcel each, one driver, one counter, Monday and Tuesday; everything fits with ease. */
 export const smallPool = (change: Partial<PoolProblem> = {}): PoolProblem => ({
-  parcels: [parcel(1), parcel(2, { breederId: 2 })],
-  breeders: [breeder(1), breeder(2)],
+  parcels: [parcel(1), parcel(2, { stopId: 2 })],
+  stops: [breeder(1), breeder(2)],
   coordinators: [driver()],
   counters: [counter()],
   fixedRuns: [],

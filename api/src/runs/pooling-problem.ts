@@ -2,7 +2,7 @@ import type { DayVerdict, Parcel } from '@shared/contract';
 import { daysBetween } from '@shared/calendar/days-between';
 import type { FixedRun, Pin, PoolParcel, PoolProblem } from '@shared/pooling/problem';
 import type { Deps } from '../deps';
-import { poolBreeder, poolCoordinator, poolCounter, circleMinute, type RunWorld } from './run-world';
+import { poolStop, poolCoordinator, poolCounter, circleMinute, type RunWorld } from './run-world';
 import { findRunParcels, findRuns, findStops, type RunRow } from './runs-queries';
 
 export const standing = ['confirmed', 'underway', 'handed-over'] as const;
@@ -19,7 +19,7 @@ export async function poolingProblem(
   const breeders = await Promise.all(
     [...world.breeders.values()].map(async (person) => {
       const { daysAway } = await services.people.availability(person.id);
-      return poolBreeder(
+      return poolStop(
         person,
         dates.filter((date) => daysAway.some((span) => span.from <= date && date <= span.to)),
       );
@@ -38,7 +38,7 @@ export async function poolingProblem(
   const known = breeders.flatMap((breeder) => breeder ?? []);
   return {
     parcels: parcels.map((parcel) => poolParcelOf(world, parcel, verdicts.get(parcel.id) ?? [])),
-    breeders: known,
+    stops: known,
     coordinators: coordinators.flatMap((coordinator) => coordinator ?? []),
     counters: [...world.counters.values()]
       .filter((counter) => counter.canDropOff && counter.active)
@@ -73,7 +73,7 @@ async function fixedRuns(
     coordinatorId: row.coordinator_id,
     date: row.date,
     counterId: row.counter_id,
-    breederIds: stops.flatMap((stop) =>
+    stopIds: stops.flatMap((stop) =>
       stop.run_id === row.id && known.has(stop.breeder_id) ? [stop.breeder_id] : [],
     ),
     volumeL: volumeL(row),
@@ -112,6 +112,7 @@ function poolParcelOf(world: RunWorld, parcel: Parcel, verdicts: readonly DayVer
   return {
     id: parcel.id,
     label: parcel.code,
+    stopId: parcel.breeder.id,
     breederId: parcel.breeder.id,
     counterId: parcel.dropOff.counterId,
     volumeL: parcel.box.volumeL,

@@ -120,7 +120,7 @@ function figures(world: RunWorld, { problem, parcels, result }: Planned) {
   const trips = result.runs.flatMap((run) => {
     const counter = problem.counters.find(({ id }) => id === run.counterId);
     return run.order.flatMap((breederId) => {
-      const breeder = problem.breeders.find(({ id }) => id === breederId);
+      const breeder = problem.stops.find(({ id }) => id === breederId);
       if (!breeder || !counter) return [];
       return [aloneTrip(breeder, counter, problem.costs, world.policy.pooling.aloneCentsPerMile)];
     });

@@ -59,9 +59,9 @@ function roomProblems({ coordinator }: RunFrame, parcels: readonly Parcel[]): st
 function driveProblems(driven: Driven, problem: PoolProblem, { counter, date }: RunFrame): string[] {
   if (cutOffInstant(counter, date) === null)
     return [`The ${counter.name} takes no drop-off on ${longDate(date)}.`];
-  if (problem.breeders.length === 0 || problem.coordinators.length === 0) return [];
-  if (problem.breeders.length > mostStops)
-    return [`A run has at most ${mostStops} stops, this one ${problem.breeders.length}.`];
+  if (problem.stops.length === 0 || problem.coordinators.length === 0) return [];
+  if (problem.stops.length > mostStops)
+    return [`A run has at most ${mostStops} stops, this one ${problem.stops.length}.`];
   if (driven.isTooLate) return ['It is too late today: the driver would have had to leave already.'];
   return driven.isDriven
     ? []
@@ -73,7 +73,7 @@ function parcelProblems(facts: RunFacts, problem: PoolProblem, frame: RunFrame, 
   const found: string[] = [];
   if (parcel.dropOff.counterId !== counter.id)
     found.push(`${parcel.code} is checked for the ${parcel.dropOff.name}, not this counter.`);
-  if (!problem.breeders.some(({ id }) => id === parcel.breeder.id))
+  if (!problem.stops.some(({ id }) => id === parcel.breeder.id))
     found.push(`${parcel.code}: where ${parcel.breeder.name} lives is not known.`);
   if (parcel.shipDate !== null && parcel.shipDate !== date)
     found.push(`${parcel.code} is booked on ${longDate(parcel.shipDate)}.`);

@@ -52,7 +52,7 @@ export function runSheet(
   // Too late for today: shown as it would have gone, with the problem beside it.
   const problem = isTooLate ? { ...inTime, earliestMinutes: {} } : inTime;
   const slot: Slot = { coordinatorId: coordinator.id, date, counterId: counter.id };
-  const ids = problem.breeders.map(({ id }) => id).sort((a, b) => a - b);
+  const ids = problem.stops.map(({ id }) => id).sort((a, b) => a - b);
   const pricer = createRunPricer(problem);
   const exact = ids.length > 0 && problem.coordinators.length > 0 ? pricer.price(slot, ids) : null;
   const priced = exact ?? relaxed(pricer, slot, ids, problem);
@@ -78,7 +78,7 @@ export function runSheet(
       parcels,
     ),
     stops: (clock?.stops ?? []).map((stop) => ({
-      breederId: stop.breederId,
+      breederId: stop.stopId,
       arriveAt: at(stop.arriveMinute),
       leaveAt: at(stop.leaveMinute),
       waitMinutes: stop.waitMinutes,
@@ -96,7 +96,7 @@ function instantOf(date: string, minute: number, zone: string): number {
 }
 
 function canBeDriven(problem: PoolProblem, { coordinator, counter, date }: RunFrame): boolean {
-  const ids = problem.breeders.map(({ id }) => id);
+  const ids = problem.stops.map(({ id }) => id);
   if (ids.length === 0 || problem.coordinators.length === 0) return false;
   const slot: Slot = { coordinatorId: coordinator.id, date, counterId: counter.id };
   return createRunPricer(problem).price(slot, ids) !== null;
@@ -117,7 +117,7 @@ function drive(problem: PoolProblem, priced: PricedRun): Timeline | null {
   const [driver] = problem.coordinators;
   const [counter] = problem.counters;
   if (!driver || !counter) return null;
-  const stops = priced.order.flatMap((id) => problem.breeders.find((breeder) => breeder.id === id) ?? []);
+  const stops = priced.order.flatMap((id) => problem.stops.find((breeder) => breeder.id === id) ?? []);
   return timeline(driver, stops, counter, priced.departMinute, problem.costs.circuity);
 }
 
@@ -125,7 +125,7 @@ function aloneCents(world: RunWorld, problem: PoolProblem): number {
   const [counter] = problem.counters;
   if (!counter) return 0;
   const perMile = world.policy.pooling.aloneCentsPerMile;
-  return problem.breeders.reduce(
+  return problem.stops.reduce(
     (sum, breeder) => sum + aloneTrip(breeder, counter, problem.costs, perMile).cents,
     0,
   );

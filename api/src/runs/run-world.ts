@@ -3,7 +3,7 @@ import type { Counter, Parcel, Person } from '@shared/contract';
 import { cutOffInstant } from '@shared/calendar/cut-off-instant';
 import type { Policy } from '@shared/policy/policy';
 import type {
-  PoolBreeder,
+  PoolStop,
   PoolCoordinator,
   PoolCounter,
   PoolCosts,
@@ -43,7 +43,7 @@ export function circleMinute(instantMs: number, date: string, zone: string): num
   return days * 1440 + at.hour * 60 + at.minute;
 }
 
-export function poolBreeder(person: Person, daysAway: readonly string[]): PoolBreeder | null {
+export function poolStop(person: Person, daysAway: readonly string[]): PoolStop | null {
   if (!person.breeder || person.lat === null || person.lon === null) return null;
   const { windowOpenMinute, windowCloseMinute, serviceMinutes } = person.breeder;
   return {
@@ -87,6 +87,7 @@ export function poolCounter(counter: Counter, dates: readonly string[], zone: st
 export const poolParcel = (parcel: Parcel, date: string): PoolParcel => ({
   id: parcel.id,
   label: parcel.code,
+  stopId: parcel.breeder.id,
   breederId: parcel.breeder.id,
   counterId: parcel.dropOff.counterId,
   volumeL: parcel.box.volumeL,
@@ -109,9 +110,9 @@ export function oneRunProblem(
   const driver = poolCoordinator(coordinator, [date]);
   return {
     parcels: parcels.map((parcel) => poolParcel(parcel, date)),
-    breeders: ids.flatMap((id) => {
+    stops: ids.flatMap((id) => {
       const person = world.breeders.get(id);
-      return (person && poolBreeder(person, [])) ?? [];
+      return (person && poolStop(person, [])) ?? [];
     }),
     coordinators: driver ? [driver] : [],
     counters: [poolCounter(counter, [date], world.zone)],

@@ -1,4 +1,4 @@
-import type { PoolBreeder, PoolProblem, Slot } from './problem';
+import type { PoolStop, PoolProblem, Slot } from './problem';
 import { estimateLeg } from './travel';
 
 /** A run as it would be driven and loaded. */
@@ -114,16 +114,16 @@ function checkRun(problem: PoolProblem, run: PlannedRun): Violation[] {
       found.push({ code: 'day-not-safe', text: `Parcel ${parcel.id} has no safe day on ${run.date}.` });
     if (parcel.counterId !== run.counterId)
       found.push({ code: 'wrong-counter', text: `Parcel ${parcel.id} is for another counter.` });
-    if (!run.order.includes(parcel.breederId))
+    if (!run.order.includes(parcel.stopId))
       found.push({ code: 'no-stop', text: `Nobody collects parcel ${parcel.id}.` });
-    if (problem.breeders.find(({ id }) => id === parcel.breederId)?.daysAway.includes(run.date))
+    if (problem.stops.find(({ id }) => id === parcel.stopId)?.daysAway.includes(run.date))
       found.push({ code: 'breeder-away', text: `The breeder of parcel ${parcel.id} is away.` });
   }
-  const needed = new Set([...(fixed?.breederIds ?? []), ...parcels.map(({ breederId }) => breederId)]);
+  const needed = new Set([...(fixed?.stopIds ?? []), ...parcels.map(({ stopId }) => stopId)]);
   for (const id of run.order)
     if (!needed.has(id))
       found.push({ code: 'idle-stop', text: `There is nothing to collect at breeder ${id}.` });
-  for (const id of fixed?.breederIds ?? [])
+  for (const id of fixed?.stopIds ?? [])
     if (!run.order.includes(id))
       found.push({ code: 'confirmed-stop-lost', text: `The confirmed stop at breeder ${id} is left out.` });
   if (new Set(run.order).size !== run.order.length)
@@ -137,7 +137,7 @@ function checkRun(problem: PoolProblem, run: PlannedRun): Violation[] {
 function checkDrive(problem: PoolProblem, run: PlannedRun): Violation[] {
   const coordinator = problem.coordinators.find(({ id }) => id === run.coordinatorId);
   const counter = problem.counters.find(({ id }) => id === run.counterId);
-  const stops = run.order.map((id) => problem.breeders.find((breeder) => breeder.id === id));
+  const stops = run.order.map((id) => problem.stops.find((breeder) => breeder.id === id));
   if (!coordinator || !counter || stops.some((stop) => !stop))
     return [{ code: 'unknown', text: 'Somebody on the run is not known.' }];
   const cutOffMinute = counter.cutOffMinutes[run.date];
@@ -148,7 +148,7 @@ function checkDrive(problem: PoolProblem, run: PlannedRun): Violation[] {
     found.push({ code: 'too-early', text: 'It would have to leave before now.' });
   let minute = run.departMinute;
   let here: { lat: number; lon: number } = coordinator;
-  for (const stop of stops as PoolBreeder[]) {
+  for (const stop of stops as PoolStop[]) {
     minute += estimateLeg(here, stop, problem.costs.circuity).minutes;
     if (minute > stop.windowCloseMinute)
       found.push({

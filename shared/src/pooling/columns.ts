@@ -7,7 +7,7 @@ import { haversineKm } from './travel';
 export interface Column {
   readonly slot: number;
   /** Ascending; a confirmed run's own stops are not listed. */
-  readonly breederIds: readonly number[];
+  readonly stopIds: readonly number[];
   readonly cents: number;
 }
 
@@ -17,14 +17,12 @@ export const exactBreeders = 9;
 const mostColumns = 60_000;
 
 /** Breeders with a parcel that may ride in the slot, ascending. */
-export const breedersOf = (instance: Instance, slot: SlotInfo): number[] =>
-  [...new Set(slot.eligible.map((parcel) => instance.parcels[parcel]?.breederId ?? -1))].sort(
-    (a, b) => a - b,
-  );
+export const stopsOf = (instance: Instance, slot: SlotInfo): number[] =>
+  [...new Set(slot.eligible.map((parcel) => instance.parcels[parcel]?.stopId ?? -1))].sort((a, b) => a - b);
 
 /** Whether listing every possible run is feasible: then the model's optimum is the true one. */
 export function isSmall(instance: Instance): boolean {
-  const sizes = instance.slots.map((slot) => breedersOf(instance, slot).length);
+  const sizes = instance.slots.map((slot) => stopsOf(instance, slot).length);
   return (
     sizes.every((size) => size <= exactBreeders) &&
     sizes.reduce((sum, size) => sum + 2 ** size - 1, 0) <= mostColumns
@@ -34,7 +32,7 @@ export function isSmall(instance: Instance): boolean {
 /** Every run that could be driven, exactly priced. Only for small instances. */
 export function allColumns(instance: Instance): Column[] {
   return instance.slots.flatMap((slot) => {
-    const breeders = breedersOf(instance, slot);
+    const breeders = stopsOf(instance, slot);
     const columns: Column[] = [];
     for (let mask = 1; mask < 1 << breeders.length; mask++) {
       const column = columnOf(
@@ -54,7 +52,7 @@ export function allColumns(instance: Instance): Column[] {
  */
 export function someColumns(instance: Instance): Column[] {
   return instance.slots.flatMap((slot) => {
-    const breeders = breedersOf(instance, slot);
+    const breeders = stopsOf(instance, slot);
     const sets = new Map<string, number[]>();
     const add = (ids: readonly number[]) => {
       const sorted = [...new Set(ids)].sort((a, b) => a - b);
@@ -74,25 +72,25 @@ export function someColumns(instance: Instance): Column[] {
 }
 
 /** A priced column, or null when the run cannot be driven or its smallest parcels already fill the vehicle. */
-export function columnOf(instance: Instance, slot: SlotInfo, breederIds: readonly number[]): Column | null {
-  if (leastVolumeL(instance, slot, breederIds) > slot.roomL + volumeTolerance) return null;
-  const cents = instance.cents(slot, breederIds);
-  return cents === Infinity ? null : { slot: slot.index, breederIds, cents };
+export function columnOf(instance: Instance, slot: SlotInfo, stopIds: readonly number[]): Column | null {
+  if (leastVolumeL(instance, slot, stopIds) > slot.roomL + volumeTolerance) return null;
+  const cents = instance.cents(slot, stopIds);
+  return cents === Infinity ? null : { slot: slot.index, stopIds, cents };
 }
 
-function leastVolumeL(instance: Instance, slot: SlotInfo, breederIds: readonly number[]): number {
-  return breederIds.reduce((sum, id) => {
+function leastVolumeL(instance: Instance, slot: SlotInfo, stopIds: readonly number[]): number {
+  return stopIds.reduce((sum, id) => {
     const volumes = slot.eligible.flatMap((index) =>
-      instance.parcels[index]?.breederId === id ? [instance.parcels[index].volumeL] : [],
+      instance.parcels[index]?.stopId === id ? [instance.parcels[index].volumeL] : [],
     );
     return sum + Math.min(...volumes);
   }, 0);
 }
 
-function nearest(instance: Instance, breederId: number, among: readonly number[]): number[] {
-  const place = new Map(instance.problem.breeders.map((breeder) => [breeder.id, breeder]));
-  const here = place.get(breederId);
+function nearest(instance: Instance, stopId: number, among: readonly number[]): number[] {
+  const place = new Map(instance.problem.stops.map((breeder) => [breeder.id, breeder]));
+  const here = place.get(stopId);
   if (!here) return [];
   const far = (id: number) => haversineKm(here, place.get(id) ?? here);
-  return among.filter((id) => id !== breederId).sort((a, b) => far(a) - far(b) || a - b);
+  return among.filter((id) => id !== stopId).sort((a, b) => far(a) - far(b) || a - b);
 }

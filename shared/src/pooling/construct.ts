@@ -26,10 +26,10 @@ export function draftOf(instance: Instance, placement: Placement): Draft {
 }
 
 export function put(instance: Instance, draft: Draft, parcel: number, slotIndex: number): void {
-  const { breederId = -1, volumeL = 0 } = instance.parcels[parcel] ?? {};
+  const { stopId = -1, volumeL = 0 } = instance.parcels[parcel] ?? {};
   const load = draft.load[slotIndex] as Map<number, number>;
   draft.at[parcel] = slotIndex;
-  load.set(breederId, (load.get(breederId) ?? 0) + 1);
+  load.set(stopId, (load.get(stopId) ?? 0) + 1);
   draft.roomL[slotIndex] = (draft.roomL[slotIndex] as number) - volumeL;
   draft.taken.set((instance.slots[slotIndex] as SlotInfo).group, slotIndex);
 }
@@ -37,11 +37,11 @@ export function put(instance: Instance, draft: Draft, parcel: number, slotIndex:
 export function take(instance: Instance, draft: Draft, parcel: number): void {
   const slotIndex = draft.at[parcel] as number;
   if (slotIndex === -1) return;
-  const { breederId = -1, volumeL = 0 } = instance.parcels[parcel] ?? {};
+  const { stopId = -1, volumeL = 0 } = instance.parcels[parcel] ?? {};
   const load = draft.load[slotIndex] as Map<number, number>;
-  const left = (load.get(breederId) ?? 1) - 1;
-  if (left === 0) load.delete(breederId);
-  else load.set(breederId, left);
+  const left = (load.get(stopId) ?? 1) - 1;
+  if (left === 0) load.delete(stopId);
+  else load.set(stopId, left);
   draft.at[parcel] = -1;
   draft.roomL[slotIndex] = (draft.roomL[slotIndex] as number) + volumeL;
   if (load.size === 0) draft.taken.delete((instance.slots[slotIndex] as SlotInfo).group);
@@ -50,14 +50,14 @@ export function take(instance: Instance, draft: Draft, parcel: number): void {
 /** What putting the parcel there would add, in cents; Infinity when it does not fit. */
 export function addedCents(instance: Instance, draft: Draft, parcel: number, option: Option): number {
   const slot = instance.slots[option.slot] as SlotInfo;
-  const { breederId = -1, volumeL = 0 } = instance.parcels[parcel] ?? {};
+  const { stopId = -1, volumeL = 0 } = instance.parcels[parcel] ?? {};
   const driven = draft.taken.get(slot.group);
   if (driven !== undefined && driven !== slot.index) return Infinity;
   if (volumeL > (draft.roomL[slot.index] as number) + volumeTolerance) return Infinity;
   const load = draft.load[slot.index] as Map<number, number>;
-  if (load.has(breederId)) return option.penaltyCents;
+  if (load.has(stopId)) return option.penaltyCents;
   const present = [...load.keys()];
-  return instance.cents(slot, [...present, breederId]) - instance.cents(slot, present) + option.penaltyCents;
+  return instance.cents(slot, [...present, stopId]) - instance.cents(slot, present) + option.penaltyCents;
 }
 
 interface Choice {

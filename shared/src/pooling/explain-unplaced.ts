@@ -69,7 +69,7 @@ function whyNobody({ problem, index, pricer }: LeftBehind, parcel: PoolParcel, p
       text: `On ${dates} no driver could collect it and be at the counter in time.`,
     };
   }
-  const breeder = problem.breeders.find(({ id }) => id === parcel.breederId);
+  const breeder = problem.stops.find(({ id }) => id === parcel.stopId);
   if (!breeder)
     return { reason: 'no-driver', text: 'Where its breeder lives is not known, so nobody can collect it.' };
   if (days.every((date) => breeder.daysAway.includes(date)))

@@ -1,6 +1,6 @@
 import { draftOf, fillByRegret, take } from './construct';
 import type { Instance } from './instance';
-import { breedersIn, objectiveCents, type Placement } from './plan';
+import { stopsIn, objectiveCents, type Placement } from './plan';
 
 export interface ImproveOptions {
   readonly seed: number;
@@ -8,7 +8,7 @@ export interface ImproveOptions {
   /** Asked between rounds; true ends the search with the best so far. */
   readonly shouldStop: () => boolean;
   /** Told every run of every plan that was accepted, as a set of breeders in a slot. */
-  readonly sawRun: (slot: number, breederIds: readonly number[]) => void;
+  readonly sawRun: (slot: number, stopIds: readonly number[]) => void;
 }
 
 /** A plan by regret, then large-neighbourhood search: takes some parcels out and puts them back better (Shaw 1998). */
@@ -38,7 +38,7 @@ export function searchPlan(instance: Instance, options: ImproveOptions): Placeme
 
 function report(instance: Instance, placement: Placement, options: ImproveOptions): void {
   for (const slot of instance.slots) {
-    const breeders = breedersIn(instance, placement, slot);
+    const breeders = stopsIn(instance, placement, slot);
     if (breeders.length > 0) options.sawRun(slot.index, breeders);
   }
 }
@@ -54,8 +54,8 @@ function ruin(instance: Instance, placement: Placement, random: () => number): n
     return placed.filter((parcel) => chosen.includes(placement[parcel]));
   }
   if (way < 0.8) {
-    const breeders = [pick(placed), pick(placed)].map((parcel) => instance.parcels[parcel ?? -1]?.breederId);
-    return placed.filter((parcel) => breeders.includes(instance.parcels[parcel]?.breederId));
+    const breeders = [pick(placed), pick(placed)].map((parcel) => instance.parcels[parcel ?? -1]?.stopId);
+    return placed.filter((parcel) => breeders.includes(instance.parcels[parcel]?.stopId));
   }
   const part = 0.1 + 0.2 * random();
   return placed.filter(() => random() < part);

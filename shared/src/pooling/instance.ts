@@ -28,7 +28,7 @@ export interface Instance {
   readonly options: readonly (readonly Option[])[];
   readonly pricer: RunPricer;
   /** What driving to these breeders costs the plan in this slot; 0 for none, Infinity when it cannot be driven. */
-  cents(slot: SlotInfo, breederIds: readonly number[]): number;
+  cents(slot: SlotInfo, stopIds: readonly number[]): number;
 }
 
 /**
@@ -49,16 +49,16 @@ export function createInstance(problem: PoolProblem, pricer = createRunPricer(pr
     slots,
     options,
     pricer,
-    cents(slot, breederIds) {
+    cents(slot, stopIds) {
       const { fixed } = slot;
       if (fixed) {
-        const extra = breederIds.filter((id) => !fixed.breederIds.includes(id));
+        const extra = stopIds.filter((id) => !fixed.stopIds.includes(id));
         if (extra.length === 0) return 0;
-        const run = pricer.price(slot, [...fixed.breederIds, ...extra]);
+        const run = pricer.price(slot, [...fixed.stopIds, ...extra]);
         return run ? run.drivingCents - (base[slot.index] as number) : Infinity;
       }
-      if (breederIds.length === 0) return 0;
-      const run = pricer.price(slot, breederIds);
+      if (stopIds.length === 0) return 0;
+      const run = pricer.price(slot, stopIds);
       return run ? run.drivingCents + problem.costs.runFixedCents : Infinity;
     },
   };
@@ -66,7 +66,7 @@ export function createInstance(problem: PoolProblem, pricer = createRunPricer(pr
 
 /** What a decided run costs as it stands; null when it cannot be driven like that, and so can take nothing more. */
 const fixedCents = (pricer: RunPricer, slot: Slot, fixed: FixedRun): number | null =>
-  fixed.breederIds.length === 0 ? 0 : (pricer.price(slot, fixed.breederIds)?.drivingCents ?? null);
+  fixed.stopIds.length === 0 ? 0 : (pricer.price(slot, fixed.stopIds)?.drivingCents ?? null);
 
 const penalty = (problem: PoolProblem, parcel: number, date: string): number =>
   problem.parcels[parcel]?.days.find((day) => day.date === date)?.penaltyCents ?? 0;
@@ -99,7 +99,7 @@ function slotsOf(problem: PoolProblem, pricer: RunPricer): SlotInfo[] {
 function mayRide(problem: PoolProblem, parcel: PoolParcel, slot: Slot, roomL: number): boolean {
   if (parcel.counterId !== slot.counterId || parcel.volumeL > roomL + volumeTolerance) return false;
   if (!parcel.days.some(({ date }) => date === slot.date)) return false;
-  const breeder = problem.breeders.find(({ id }) => id === parcel.breederId);
+  const breeder = problem.stops.find(({ id }) => id === parcel.stopId);
   if (!breeder || breeder.daysAway.includes(slot.date)) return false;
   const pin = problem.pins.find(({ parcelId }) => parcelId === parcel.id);
   return !pin || slotKey(pin) === slotKey(slot);

@@ -1,7 +1,7 @@
 import type { Column } from './columns';
-import { breedersOf } from './columns';
+import { stopsOf } from './columns';
 import type { Instance, SlotInfo } from './instance';
-import { breedersIn, type Placement } from './plan';
+import { stopsIn, type Placement } from './plan';
 
 /** What a solver answers. `values` by variable name, zeros may be left out; null without a solution. */
 export interface MilpAnswer {
@@ -20,7 +20,7 @@ export type SolveMilp = (
 ) => MilpAnswer;
 
 const x = (parcel: number, slot: number) => `x${parcel}_${slot}`;
-const y = (slot: number, breederId: number) => `y${slot}_${breederId}`;
+const y = (slot: number, stopId: number) => `y${slot}_${stopId}`;
 
 /**
  * The set-partition model in LP format. λ (`l`): this run is driven; y: its breeder is visited (the sum of the λ with the
@@ -58,7 +58,7 @@ export function milpText(instance: Instance, columns: readonly Column[]): string
     ...rows,
     'Bounds',
     ...instance.slots.flatMap((slot) =>
-      breedersOf(instance, slot).map((id) => ` 0 <= ${y(slot.index, id)} <= 1`),
+      stopsOf(instance, slot).map((id) => ` 0 <= ${y(slot.index, id)} <= 1`),
     ),
     'Binary',
     ...columns.map((_, index) => ` l${index}`),
@@ -89,11 +89,11 @@ function slotRows(
   columns: readonly { column: Column; name: string }[],
   row: (terms: readonly string[], rest: string) => void,
 ): void {
-  for (const id of breedersOf(instance, slot)) {
+  for (const id of stopsOf(instance, slot)) {
     const visit = y(slot.index, id);
-    const own = slot.eligible.filter((parcel) => instance.parcels[parcel]?.breederId === id);
+    const own = slot.eligible.filter((parcel) => instance.parcels[parcel]?.stopId === id);
     const visiting = columns
-      .filter(({ column }) => column.breederIds.includes(id))
+      .filter(({ column }) => column.stopIds.includes(id))
       .map(({ name }) => `- ${name}`);
     row([`+ ${visit}`, ...visiting], '= 0');
     for (const parcel of own) row([`+ ${x(parcel, slot.index)}`, `- ${visit}`], '<= 0');
@@ -121,10 +121,10 @@ export function valuesOf(
   const values: Record<string, number> = {};
   placement.forEach((at, parcel) => (values[at === -1 ? `s${parcel}` : x(parcel, at)] = 1));
   for (const slot of instance.slots) {
-    const ids = breedersIn(instance, placement, slot);
+    const ids = stopsIn(instance, placement, slot);
     if (ids.length === 0) continue;
     const index = columns.findIndex(
-      (column) => column.slot === slot.index && column.breederIds.join() === ids.join(),
+      (column) => column.slot === slot.index && column.stopIds.join() === ids.join(),
     );
     if (index === -1) return null;
     values[`l${index}`] = 1;

@@ -4,7 +4,7 @@ import { explainUnplaced, type UnplacedParcel } from './explain-unplaced';
 import { searchPlan } from './improve';
 import { createInstance, type Instance, type SlotInfo } from './instance';
 import { milpText, placementOf, valuesOf, type SolveMilp } from './milp';
-import { breedersIn, objectiveCents, type Placement } from './plan';
+import { stopsIn, objectiveCents, type Placement } from './plan';
 import type { PoolProblem } from './problem';
 
 export interface PlanOptions {
@@ -69,7 +69,7 @@ export function planRuns(problem: PoolProblem, solveMilp: SolveMilp, options: Pl
 
 function merge(seen: ReadonlyMap<string, Column>, more: readonly Column[]): Column[] {
   const all = new Map(seen);
-  for (const column of more) all.set(`${column.slot}:${column.breederIds.join(',')}`, column);
+  for (const column of more) all.set(`${column.slot}:${column.stopIds.join(',')}`, column);
   return [...all.values()];
 }
 
@@ -80,9 +80,9 @@ const wholeBound = (bound: number | null): number =>
 /** Drives and prices the runs of a placement. */
 export function planOf(instance: Instance, placement: Placement): Plan {
   const runs = instance.slots.flatMap((slot): PlannedRun[] => {
-    const added = breedersIn(instance, placement, slot);
+    const added = stopsIn(instance, placement, slot);
     if (added.length === 0) return [];
-    const ids = [...new Set([...(slot.fixed?.breederIds ?? []), ...added])];
+    const ids = [...new Set([...(slot.fixed?.stopIds ?? []), ...added])];
     const run = instance.pricer.price(slot, ids);
     if (!run)
       throw new Error(`The run of coordinator ${slot.coordinatorId} on ${slot.date} cannot be driven.`);

@@ -4,10 +4,10 @@ import { volumeTolerance, type Instance, type SlotInfo } from './instance';
 export type Placement = readonly number[];
 
 /** The breeders whose parcels ride in a slot, ascending (those of a confirmed run not counted). */
-export function breedersIn(instance: Instance, placement: Placement, slot: SlotInfo): number[] {
+export function stopsIn(instance: Instance, placement: Placement, slot: SlotInfo): number[] {
   const ids = new Set<number>();
   placement.forEach((at, parcel) => {
-    if (at === slot.index) ids.add(instance.parcels[parcel]?.breederId ?? -1);
+    if (at === slot.index) ids.add(instance.parcels[parcel]?.stopId ?? -1);
   });
   return [...ids].sort((a, b) => a - b);
 }
@@ -29,7 +29,7 @@ export function objectiveCents(instance: Instance, placement: Placement): number
   }
   const groups = new Set<string>();
   for (const slot of instance.slots) {
-    const breeders = breedersIn(instance, placement, slot);
+    const breeders = stopsIn(instance, placement, slot);
     if (breeders.length === 0) continue;
     if (groups.has(slot.group) || volumeIn(instance, placement, slot) > slot.roomL + volumeTolerance)
       return Infinity;

@@ -14,6 +14,9 @@ export interface PoolParcel {
   readonly id: number;
   /** What people call it; used in sentences. */
   readonly label: string;
+  /** Where it gets aboard. */
+  readonly stopId: number;
+  /** Who pays for it: several breeders may bring boxes to one stop. */
   readonly breederId: number;
   /** Verdict and route rest on this drop-off counter: only a run to it takes the parcel. */
   readonly counterId: number;
@@ -30,7 +33,8 @@ export interface PoolParcel {
   readonly dayFixed: boolean;
 }
 
-export interface PoolBreeder extends Point {
+/** Where a driver takes boxes aboard: a breeder's place, or one that breeders bring them to. */
+export interface PoolStop extends Point {
   readonly id: number;
   readonly name: string;
   /** Collection window, minutes after midnight on the circle's clock; both ends count. */
@@ -65,7 +69,7 @@ export interface FixedRun {
   readonly coordinatorId: number;
   readonly date: string;
   readonly counterId: number;
-  readonly breederIds: readonly number[];
+  readonly stopIds: readonly number[];
   readonly volumeL: number;
 }
 
@@ -88,7 +92,7 @@ export interface PoolCosts {
 /** Everything the pooling decides from. Money in whole cents, room in litres, times in whole minutes. */
 export interface PoolProblem {
   readonly parcels: readonly PoolParcel[];
-  readonly breeders: readonly PoolBreeder[];
+  readonly stops: readonly PoolStop[];
   readonly coordinators: readonly PoolCoordinator[];
   readonly counters: readonly PoolCounter[];
   readonly fixedRuns: readonly FixedRun[];

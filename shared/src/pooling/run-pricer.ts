@@ -1,5 +1,5 @@
 import { legCents } from './cost';
-import { mostStops, type Point, type PoolBreeder, type PoolProblem, type Slot } from './problem';
+import { mostStops, type Point, type PoolStop, type PoolProblem, type Slot } from './problem';
 import {
   bestPath,
   sequenceTable,
@@ -22,19 +22,19 @@ export interface PricedRun {
 /** Prices runs exactly; the answers are kept, for the same stops come up again and again. */
 export interface RunPricer {
   /** Null when no order keeps windows, cut-off and the longest run, or there are more stops than a run may have. */
-  price(slot: Slot, breederIds: readonly number[]): PricedRun | null;
+  price(slot: Slot, stopIds: readonly number[]): PricedRun | null;
   /** The same with windows, cut-off and length left aside: for a run that is to be shown with what is wrong. */
-  relaxed(slot: Slot, breederIds: readonly number[]): PricedRun;
+  relaxed(slot: Slot, stopIds: readonly number[]): PricedRun;
 }
 
 const never = 1e7;
 /** A run to a counter that is shut that day is shown as if it had to be there by 17:00. */
 const shutCounterMinute = 17 * 60;
 
-/** `breederIds` of the pricer's world is every breeder of the problem; unknown ids throw. */
+/** `stopIds` of the pricer's world is every breeder of the problem; unknown ids throw. */
 export function createRunPricer(problem: PoolProblem): RunPricer {
-  const breeders = new Map(problem.breeders.map((breeder) => [breeder.id, breeder]));
-  const byCounter = new Map(problem.counters.map((counter) => [counter.id, breedersOf(problem, counter.id)]));
+  const breeders = new Map(problem.stops.map((breeder) => [breeder.id, breeder]));
+  const byCounter = new Map(problem.counters.map((counter) => [counter.id, stopsOf(problem, counter.id)]));
   const tables = new Map<string, SequenceTable>();
   const memo = new Map<string, PricedRun | null>();
   const named = (ids: readonly number[]) => ids.map((id) => need(breeders.get(id), `breeder ${id}`));
@@ -49,18 +49,18 @@ export function createRunPricer(problem: PoolProblem): RunPricer {
   };
 
   return {
-    price(slot, breederIds) {
-      if (breederIds.length === 0 || breederIds.length > mostStops) return null;
+    price(slot, stopIds) {
+      if (stopIds.length === 0 || stopIds.length > mostStops) return null;
       const frame = frameKey(problem, slot);
       if (frame === null) return null;
-      const ids = breederIds.toSorted((a, b) => a - b);
+      const ids = stopIds.toSorted((a, b) => a - b);
       const key = `${frame}:${ids.join(',')}`;
       let answer = memo.get(key);
       if (answer === undefined) memo.set(key, (answer = solve(slot, ids, frame)));
       return answer;
     },
-    relaxed(slot, breederIds) {
-      const exact = sequenceOf(problem, slot, named(breederIds.toSorted((a, b) => a - b)));
+    relaxed(slot, stopIds) {
+      const exact = sequenceOf(problem, slot, named(stopIds.toSorted((a, b) => a - b)));
       const loose = {
         ...exact,
         stops: exact.stops.map((stop) => ({ ...stop, openMinute: -never, closeMinute: never })),
@@ -70,7 +70,7 @@ export function createRunPricer(problem: PoolProblem): RunPricer {
       };
       const answer = priced(
         bestPath(loose),
-        breederIds.toSorted((a, b) => a - b),
+        stopIds.toSorted((a, b) => a - b),
       );
       return {
         ...need(answer, 'a path without limits'),
@@ -81,7 +81,7 @@ export function createRunPricer(problem: PoolProblem): RunPricer {
 }
 
 /** Minutes and cents of the stops of a run, as the sequence takes them. */
-export function sequenceOf(problem: PoolProblem, slot: Slot, stops: readonly PoolBreeder[]): SequenceProblem {
+export function sequenceOf(problem: PoolProblem, slot: Slot, stops: readonly PoolStop[]): SequenceProblem {
   const { costs } = problem;
   const coordinator = need(
     problem.coordinators.find(({ id }) => id === slot.coordinatorId),
@@ -120,13 +120,13 @@ function frameKey(problem: PoolProblem, slot: Slot): string | null {
   return `${slot.coordinatorId}|${slot.counterId}|${cutOff}|${problem.earliestMinutes[slot.date] ?? 0}`;
 }
 
-function breedersOf(problem: PoolProblem, counterId: number): number[] {
+function stopsOf(problem: PoolProblem, counterId: number): number[] {
   const ids = new Set(
-    problem.parcels.filter((parcel) => parcel.counterId === counterId).map(({ breederId }) => breederId),
+    problem.parcels.filter((parcel) => parcel.counterId === counterId).map(({ stopId }) => stopId),
   );
   for (const run of problem.fixedRuns)
-    if (run.counterId === counterId) for (const id of run.breederIds) ids.add(id);
-  const known = new Set(problem.breeders.map(({ id }) => id));
+    if (run.counterId === counterId) for (const id of run.stopIds) ids.add(id);
+  const known = new Set(problem.stops.map(({ id }) => id));
   return [...ids].filter((id) => known.has(id)).sort((a, b) => a - b);
 }
 

@@ -1,9 +1,9 @@
-import type { PoolBreeder, PoolCoordinator, PoolCounter } from './problem';
+import type { PoolStop, PoolCoordinator, PoolCounter } from './problem';
 import { estimateLeg } from './travel';
 
 /** A stop as driven; minutes after midnight on the circle's clock. */
 export interface TimedStop {
-  readonly breederId: number;
+  readonly stopId: number;
   readonly arriveMinute: number;
   readonly leaveMinute: number;
   /** Waiting for the window to open. */
@@ -25,7 +25,7 @@ export interface Timeline {
 /** Drives the stops in the given order from a given departure, waiting where a window is not open yet. */
 export function timeline(
   coordinator: PoolCoordinator,
-  stops: readonly PoolBreeder[],
+  stops: readonly PoolStop[],
   counter: PoolCounter,
   departMinute: number,
   circuity: number,
@@ -43,7 +43,7 @@ export function timeline(
     driveMinutes += leg.minutes;
     miles += leg.miles;
     return {
-      breederId: stop.id,
+      stopId: stop.id,
       arriveMinute,
       leaveMinute: minute,
       waitMinutes,
