@@ -3,10 +3,8 @@ import {
   Component,
   computed,
   effect,
-  ElementRef,
   inject,
   input,
-  signal,
   untracked,
 } from '@angular/core';
 import { rxResource, toSignal } from '@angular/core/rxjs-interop';
@@ -19,21 +17,17 @@ import { MatInput } from '@angular/material/input';
 import { MatProgressBar } from '@angular/material/progress-bar';
 import { MatRadioModule } from '@angular/material/radio';
 import { MatOption, MatSelect } from '@angular/material/select';
-import { MatSnackBar } from '@angular/material/snack-bar';
-import { Router } from '@angular/router';
-import { map, of, startWith } from 'rxjs';
 import type { Blackout, BlackoutPreview } from '@shared/contract';
+import { map, startWith } from 'rxjs';
 import { DayLabelPipe } from '../../core/day-label-pipe';
 import { FieldMessagePipe } from '../../core/http/field-message-pipe';
 import { SessionStore } from '../../core/session/session-store';
 import { errorText } from '../../ui/call-state';
-import { focusFirstError } from '../../ui/focus-first-error';
+import { EditPage } from '../../ui/edit-page';
 import { NextAction } from '../../ui/next-action/next-action';
 import { PageHeader } from '../../ui/page-header/page-header';
 import { dateIn } from '../../ui/plain-dates';
 import { ProblemNote } from '../../ui/problem-note/problem-note';
-import { SaveState } from '../../ui/save-state';
-import type { HasUnsavedChanges } from '../../ui/unsaved-guard';
 import { usStates } from '../../ui/us-states';
 import { blackoutAnswers, bodyOf, choiceOf, fillAnswers, renamedFields } from '../blackout-answers';
 import { nextDays } from '../blackout-words';
@@ -66,18 +60,12 @@ const offered = { yearly: 5, range: 31, date: 0 };
   ],
   templateUrl: './blackout-form.html',
   styleUrl: './blackout-form.scss',
-  host: { '(window:beforeunload)': 'warn($event)' },
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
-export class BlackoutForm implements HasUnsavedChanges {
+export class BlackoutForm extends EditPage<Blackout> {
   private readonly api = inject(BlackoutsApi);
   private readonly dialog = inject(MatDialog);
-  private readonly router = inject(Router);
-  private readonly snack = inject(MatSnackBar);
-  private readonly host = inject<ElementRef<HTMLElement>>(ElementRef);
 
-  /** From the path; none for a new one. */
-  readonly id = input<string>();
   /** From the address of a new one: the day and the kind it begins with. */
   readonly date = input<string>();
   readonly kind = input<string>();
@@ -86,25 +74,18 @@ export class BlackoutForm implements HasUnsavedChanges {
 
   private readonly today = dateIn(inject(SessionStore).circleZone(), new Date());
   protected readonly form = blackoutAnswers();
-  protected readonly saving = new SaveState();
   protected readonly monthNames = monthNames;
   protected readonly weekdayNames = weekdayNames;
   protected readonly nthNames = [...nthNames];
   protected readonly usStates = usStates;
   protected readonly days = Array.from({ length: 31 }, (_none, index) => index + 1);
 
-  protected readonly loaded = rxResource({
-    params: () => this.id(),
-    stream: ({ params }) => (params === undefined ? of(undefined) : this.api.find(Number(params))),
-  });
   private readonly named = rxResource({ stream: () => this.api.names() });
   protected readonly carriers = computed(() => (this.named.hasValue() ? this.named.value().carriers : []));
   protected readonly counters = computed(() => (this.named.hasValue() ? this.named.value().counters : []));
-  protected readonly seen = computed(() => (this.loaded.hasValue() ? (this.loaded.value() ?? null) : null));
   protected readonly isGone = computed(
     () => this.id() !== undefined && this.loaded.status() === 'resolved' && this.seen() === null,
   );
-  protected readonly isReady = computed(() => this.id() === undefined || this.seen() !== null);
   protected readonly problem = computed(() => errorText(this.loaded.error() ?? this.named.error()));
   protected readonly value = toSignal(
     this.form.valueChanges.pipe(
@@ -135,21 +116,17 @@ export class BlackoutForm implements HasUnsavedChanges {
     const all = kind === 'date' ? [] : [...new Set([...days, ...extra])].toSorted();
     return all.map((day) => ({ day, isLifted: liftedDates.includes(day) }));
   });
-  private readonly isDone = signal(false);
 
   constructor() {
+    super();
     effect(() => {
       const seen = this.seen();
       untracked(() => (seen ? fillAnswers(this.form, seen) : this.begin()));
     });
   }
 
-  hasUnsavedChanges(): boolean {
-    return this.form.dirty && !this.isDone();
-  }
-
-  protected warn(event: BeforeUnloadEvent): void {
-    if (this.hasUnsavedChanges()) event.preventDefault();
+  protected override fetch(id: string) {
+    return this.api.find(Number(id));
   }
 
   protected setLifted(day: string, isLifted: boolean): void {
@@ -160,30 +137,28 @@ export class BlackoutForm implements HasUnsavedChanges {
   }
 
   protected async save(): Promise<void> {
-    this.form.markAllAsTouched();
-    if (this.saving.busy()) return;
-    if (this.form.invalid) return focusFirstError(this.host.nativeElement);
+    if (!this.maySend()) return;
     const seen = this.seen();
     const body = bodyOf(this.form, seen);
     const renamed = renamedFields(this.form);
     const preview = await this.saving.save(this.api.preview(body, seen?.id), this.form, renamed);
-    if (!preview) return focusFirstError(this.host.nativeElement);
+    if (!preview) return this.showFirstError();
     if (!(await this.isAccepted(`Save “${body.title}”?`, preview, false))) return;
     const call = seen ? this.api.change(seen, body) : this.api.add(body);
     const saved = await this.saving.save(call, this.form, renamed);
-    if (saved) await this.leave(`“${saved.title}” is saved.`);
+    if (saved) await this.leave(`“${saved.title}” is saved.`, '/blackouts');
   }
 
   protected async remove(seen: Blackout): Promise<void> {
     const preview = await this.saving.save(this.api.preview(null, seen.id), this.form);
     if (!preview || !(await this.isAccepted(`Remove “${seen.title}”?`, preview, true))) return;
     const call = this.api.remove(seen).pipe(map(() => true));
-    if (await this.saving.save(call, this.form)) await this.leave(`“${seen.title}” is removed.`);
+    if (await this.saving.save(call, this.form))
+      await this.leave(`“${seen.title}” is removed.`, '/blackouts');
   }
 
-  protected again(): void {
-    this.saving.clear();
-    this.loaded.reload();
+  protected override again(): void {
+    super.again();
     this.named.reload();
   }
 
@@ -201,11 +176,5 @@ export class BlackoutForm implements HasUnsavedChanges {
       month: Number(from.slice(5, 7)),
       day: Number(from.slice(8)),
     });
-  }
-
-  private async leave(text: string): Promise<void> {
-    this.isDone.set(true);
-    this.snack.open(text, undefined, { duration: 4000 });
-    await this.router.navigateByUrl('/blackouts');
   }
 }

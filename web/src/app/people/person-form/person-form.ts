@@ -4,9 +4,7 @@ import {
   Component,
   computed,
   effect,
-  ElementRef,
   inject,
-  input,
   signal,
   untracked,
 } from '@angular/core';
@@ -20,19 +18,16 @@ import { MatIcon } from '@angular/material/icon';
 import { MatInput } from '@angular/material/input';
 import { MatProgressBar } from '@angular/material/progress-bar';
 import { MatOption, MatSelect } from '@angular/material/select';
-import { MatSnackBar } from '@angular/material/snack-bar';
-import { Router } from '@angular/router';
-import { map, of, startWith } from 'rxjs';
 import type { Counter, Person } from '@shared/contract';
+import { map, startWith } from 'rxjs';
 import { FieldMessagePipe } from '../../core/http/field-message-pipe';
 import { errorText } from '../../ui/call-state';
 import { confirmed } from '../../ui/confirm-dialog/confirm-dialog';
-import { focusFirstError } from '../../ui/focus-first-error';
+import { EditPage } from '../../ui/edit-page';
 import { NextAction } from '../../ui/next-action/next-action';
 import { PageHeader } from '../../ui/page-header/page-header';
 import { ProblemNote } from '../../ui/problem-note/problem-note';
-import { onVersion, SaveState } from '../../ui/save-state';
-import type { HasUnsavedChanges } from '../../ui/unsaved-guard';
+import { onVersion } from '../../ui/save-state';
 import { usStates } from '../../ui/us-states';
 import { zoneChoices } from '../../ui/us-zones';
 import { WeekdayToggle } from '../../ui/weekday-toggle/weekday-toggle';
@@ -68,30 +63,15 @@ import {
   ],
   templateUrl: './person-form.html',
   styleUrl: './person-form.scss',
-  host: { '(window:beforeunload)': 'warn($event)' },
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
-export class PersonForm implements HasUnsavedChanges {
+export class PersonForm extends EditPage<Person> {
   private readonly http = inject(HttpClient);
-  private readonly router = inject(Router);
-  private readonly snack = inject(MatSnackBar);
-  private readonly host = inject<ElementRef<HTMLElement>>(ElementRef);
   private readonly dialog = inject(MatDialog);
 
-  /** From the path; none for a new one. */
-  readonly id = input<string>();
-
   protected readonly form = personAnswers();
-  protected readonly saving = new SaveState();
   protected readonly usStates = usStates;
-  protected readonly loaded = rxResource({
-    params: () => this.id(),
-    stream: ({ params }) =>
-      params === undefined ? of(null) : this.http.get<Person>(`/api/people/${params}`),
-  });
   private readonly listed = rxResource({ stream: () => this.http.get<Counter[]>('/api/counters') });
-  protected readonly seen = computed(() => (this.loaded.hasValue() ? this.loaded.value() : null));
-  protected readonly isReady = computed(() => this.id() === undefined || this.seen() !== null);
   protected readonly problem = computed(() => errorText(this.loaded.error() ?? this.listed.error()));
   protected readonly value = toSignal(
     this.form.valueChanges.pipe(
@@ -118,9 +98,9 @@ export class PersonForm implements HasUnsavedChanges {
     { role: 'admin', about: 'keeps the circle' },
   ] as const;
   protected readonly roleProblem = signal('');
-  private readonly isDone = signal(false);
 
   constructor() {
+    super();
     effect(() => {
       const seen = this.seen();
       // Switching somebody on or off brings a new version, but must not lose what is being typed.
@@ -133,12 +113,8 @@ export class PersonForm implements HasUnsavedChanges {
     });
   }
 
-  hasUnsavedChanges(): boolean {
-    return this.form.dirty && !this.isDone();
-  }
-
-  protected warn(event: BeforeUnloadEvent): void {
-    if (this.hasUnsavedChanges()) event.preventDefault();
+  protected override fetch(id: string) {
+    return this.http.get<Person>(`/api/people/${id}`);
   }
 
   protected async save(): Promise<void> {
@@ -151,10 +127,8 @@ export class PersonForm implements HasUnsavedChanges {
       ? this.http.patch<Person>(`/api/people/${seen.id}`, personPatchBody(this.form), onVersion(seen))
       : this.http.post<Person>('/api/people', personNewBody(this.form));
     const saved = await this.saving.save(call, this.form, personRenames);
-    if (!saved) return focusFirstError(this.host.nativeElement);
-    this.isDone.set(true);
-    this.say(seen ? `${saved.name} is saved.` : `${saved.name} was sent an invitation.`);
-    await this.router.navigateByUrl('/people');
+    if (!saved) return this.showFirstError();
+    await this.leave(seen ? `${saved.name} is saved.` : `${saved.name} was sent an invitation.`, '/people');
   }
 
   /** A fresh link to choose a password with; older ones end. */
@@ -179,19 +153,9 @@ export class PersonForm implements HasUnsavedChanges {
     this.loaded.set(saved);
   }
 
-  private refuse(): void {
-    this.saving.say('Please correct the marked fields.');
-    focusFirstError(this.host.nativeElement);
-  }
-
-  protected again(): void {
-    this.saving.clear();
+  protected override again(): void {
+    super.again();
     this.form.markAsPristine();
-    this.loaded.reload();
     this.listed.reload();
-  }
-
-  private say(text: string): void {
-    this.snack.open(text, undefined, { duration: 4000 });
   }
 }

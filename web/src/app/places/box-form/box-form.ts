@@ -1,32 +1,19 @@
-import {
-  ChangeDetectionStrategy,
-  Component,
-  computed,
-  effect,
-  ElementRef,
-  inject,
-  input,
-  signal,
-  untracked,
-} from '@angular/core';
-import { rxResource, toSignal } from '@angular/core/rxjs-interop';
+import { ChangeDetectionStrategy, Component, computed, effect, inject, untracked } from '@angular/core';
+import { toSignal } from '@angular/core/rxjs-interop';
 import { NonNullableFormBuilder, ReactiveFormsModule, Validators } from '@angular/forms';
 import { MatButton } from '@angular/material/button';
 import { MatCheckbox } from '@angular/material/checkbox';
 import { MatFormFieldModule } from '@angular/material/form-field';
 import { MatInput } from '@angular/material/input';
 import { MatProgressBar } from '@angular/material/progress-bar';
-import { MatSnackBar } from '@angular/material/snack-bar';
-import { Router } from '@angular/router';
-import { map, of, startWith } from 'rxjs';
+import type { Box } from '@shared/contract';
+import { map, startWith } from 'rxjs';
 import { FieldMessagePipe } from '../../core/http/field-message-pipe';
 import { errorText } from '../../ui/call-state';
-import { focusFirstError } from '../../ui/focus-first-error';
+import { EditPage } from '../../ui/edit-page';
 import { NextAction } from '../../ui/next-action/next-action';
 import { PageHeader } from '../../ui/page-header/page-header';
 import { ProblemNote } from '../../ui/problem-note/problem-note';
-import { SaveState } from '../../ui/save-state';
-import type { HasUnsavedChanges } from '../../ui/unsaved-guard';
 import { PlacesApi } from '../places-api';
 
 /** Litres in a cubic inch: 2.54 cm is an inch by definition. */
@@ -49,18 +36,11 @@ const litresPerCubicInch = 2.54 ** 3 / 1000;
   ],
   templateUrl: './box-form.html',
   styleUrl: './box-form.scss',
-  host: { '(window:beforeunload)': 'warn($event)' },
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
-export class BoxForm implements HasUnsavedChanges {
+export class BoxForm extends EditPage<Box> {
   private readonly api = inject(PlacesApi);
-  private readonly router = inject(Router);
-  private readonly snack = inject(MatSnackBar);
-  private readonly host = inject<ElementRef<HTMLElement>>(ElementRef);
   private readonly build = inject(NonNullableFormBuilder);
-
-  /** From the path; none for a new one. */
-  readonly id = input<string>();
 
   protected readonly form = this.build.group({
     name: ['', Validators.required],
@@ -70,13 +50,6 @@ export class BoxForm implements HasUnsavedChanges {
     foamIn: this.size(0.75),
     active: [true],
   });
-  protected readonly saving = new SaveState();
-  protected readonly loaded = rxResource({
-    params: () => this.id(),
-    stream: ({ params }) => (params === undefined ? of(null) : this.api.box(params)),
-  });
-  protected readonly seen = computed(() => (this.loaded.hasValue() ? this.loaded.value() : null));
-  protected readonly isReady = computed(() => this.id() === undefined || this.seen() !== null);
   protected readonly problem = computed(() => errorText(this.loaded.error()));
   protected readonly volume = toSignal(
     this.form.valueChanges.pipe(
@@ -86,9 +59,9 @@ export class BoxForm implements HasUnsavedChanges {
     ),
     { requireSync: true },
   );
-  private readonly isDone = signal(false);
 
   constructor() {
+    super();
     effect(() => {
       const seen = this.seen();
       if (!seen) return;
@@ -97,33 +70,15 @@ export class BoxForm implements HasUnsavedChanges {
     });
   }
 
-  hasUnsavedChanges(): boolean {
-    return this.form.dirty && !this.isDone();
-  }
-
-  protected warn(event: BeforeUnloadEvent): void {
-    if (this.hasUnsavedChanges()) event.preventDefault();
+  protected override fetch(id: string) {
+    return this.api.box(id);
   }
 
   protected async save(): Promise<void> {
-    this.form.markAllAsTouched();
-    if (this.saving.busy()) return;
-    if (this.form.invalid) return this.refuse();
+    if (!this.maySend()) return;
     const saved = await this.saving.save(this.api.saveBox(this.seen(), this.form.getRawValue()), this.form);
-    if (!saved) return focusFirstError(this.host.nativeElement);
-    this.isDone.set(true);
-    this.snack.open(`${saved.name} is saved.`, undefined, { duration: 4000 });
-    await this.router.navigateByUrl('/boxes');
-  }
-
-  private refuse(): void {
-    this.saving.say('Please correct the marked fields.');
-    focusFirstError(this.host.nativeElement);
-  }
-
-  protected again(): void {
-    this.saving.clear();
-    this.loaded.reload();
+    if (saved) await this.leave(`${saved.name} is saved.`, '/boxes');
+    else this.showFirstError();
   }
 
   private size(inches: number) {
