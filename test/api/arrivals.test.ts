@@ -49,6 +49,22 @@ describe('the buyer’s link', () => {
     expect(arrival.bring.join(' ')).toContain('photo ID in the name of Bo Buyer');
   });
 
+  it('speaks of what is still to come as to come, and of what is done as done', async () => {
+    const texts = async (parcel: Parcel) => (await see(parcel)).steps.map(({ text }) => text);
+    expect(await texts(await enter())).toEqual([
+      'The breeder chooses a safe day.',
+      "The ride to the carrier's counter is being arranged.",
+      'Hand-over to the overnight carrier.',
+      'At the counter.',
+      'You collect it.',
+    ]);
+    expect((await texts(await handedOver())).slice(0, 3)).toEqual([
+      'The breeder chose a safe day.',
+      "The ride to the carrier's counter is arranged.",
+      'Handed over to the overnight carrier.',
+    ]);
+  });
+
   it('shows a parcel without a day as open, and tells nothing of the breeder’s other business', async () => {
     const parcel = await enter({ note: 'the buyer haggled' });
     const arrival = await see(parcel);

@@ -207,6 +207,27 @@ describe('a new blackout', () => {
     expect(await site.db('history').where({ subject_kind: 'blackout' })).toEqual([]);
   });
 
+  it('can be renamed when one of its lines has run out, but takes no new line that has', async () => {
+    // The year 2020 is over for good; such a line stands in a blackout that was entered before.
+    const over = yearly('BYMONTH=7;BYMONTHDAY=4;UNTIL=20200705');
+    const rules = `${yearly('BYMONTH=12;BYMONTHDAY=24')}\n${over}`;
+    const saved = await enter({
+      ...oneDay('2026-12-24'),
+      kind: 'yearly',
+      startDate: null,
+      rules: yearly('BYMONTH=12;BYMONTHDAY=24'),
+    });
+    await site.db('blackouts').where({ id: saved.id }).update({ rules });
+    const renamed = await admin
+      .patch(`/api/blackouts/${saved.id}`)
+      .send({ title: 'Early close' })
+      .expect(200);
+    expect(renamed.body).toMatchObject({ title: 'Early close', rules });
+    const worse = `${rules}\n${yearly('BYMONTH=8;BYMONTHDAY=4;UNTIL=20200705')}`;
+    const refused = await admin.patch(`/api/blackouts/${saved.id}`).send({ rules: worse }).expect(400);
+    expect(paths(refused.body)).toEqual(['rules']);
+  });
+
   it('is held to its rules as a whole when a part is changed', async () => {
     const { id } = await enter(oneDay('2026-12-07'));
     expect(

@@ -8,21 +8,25 @@ import type { BlackoutFields } from './blackouts-queries';
 
 /**
  * A blackout as it may be stored: consistent as a whole, its rules understood, what it names existing, and only its own
- * scope's member set. Throws 400 field by field.
+ * scope's member set. Lines of `stored` rules are not asked again whether they ever fall: one that has run out stays as it is.
+ * Throws 400 field by field.
  */
 export async function checkedBlackout(
   { services }: Deps,
   fields: BlackoutFields,
   today: string,
+  stored: string | null = null,
 ): Promise<BlackoutFields> {
   const parsed = blackoutNew.safeParse(fields);
   if (!parsed.success) throw inputError(parsed.error);
   const errors: FieldProblem[] = [];
   const { scope, kind, rules, startDate } = parsed.data;
   if (kind === 'yearly') {
+    const kept = new Set(ruleLines(stored));
     // Stops at the first bad line: to find out that a day never comes takes a good part of a second.
     for (const rule of ruleLines(rules)) {
-      const problem = yearlyRuleProblem(rule, startDate) ?? neverFalls(rule, today, startDate);
+      const problem =
+        yearlyRuleProblem(rule, startDate) ?? (kept.has(rule) ? null : neverFalls(rule, today, startDate));
       if (problem === null) continue;
       errors.push({ path: 'rules', message: problem });
       break;

@@ -93,6 +93,7 @@ export function createBlackoutsService(deps: Deps): BlackoutsService {
         deps,
         { ...fieldsOf(seen), ...defined(patch) },
         await todayOf(deps),
+        seen.rules,
       );
       return deps.transaction(async (tx) => {
         const now = await get(tx, id);
@@ -113,10 +114,10 @@ export function createBlackoutsService(deps: Deps): BlackoutsService {
       }),
     async preview({ blackout, replaces }) {
       const before = await findBlackouts(deps.db);
-      if (replaces !== undefined && !before.some(({ id }) => id === replaces))
-        throw notFound('That blackout');
+      const replaced = before.find(({ id }) => id === replaces);
+      if (replaces !== undefined && !replaced) throw notFound('That blackout');
       const today = await todayOf(deps);
-      const fields = blackout ? await checkedBlackout(deps, blackout, today) : null;
+      const fields = blackout ? await checkedBlackout(deps, blackout, today, replaced?.rules) : null;
       const after = [...before.filter(({ id }) => id !== replaces), ...(fields ? [fields] : [])];
       const days = fields ? blackoutDates(fields, today, addDays(today, previewDays)) : [];
       return previewOf(deps, await movedBy(deps, before, after), days);
