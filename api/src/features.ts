@@ -5,6 +5,7 @@ import { deskRoutes } from './desk/desk-routes';
 import type { AnyRoute } from './http/route';
 import { blackoutsRoutes } from './blackouts/blackouts-routes';
 import { daysRoutes } from './days/days-routes';
+import { liveRoutes } from './live/live-routes';
 import { parcelsRoutes } from './parcels/parcels-routes';
 import { peopleRoutes } from './people/people-routes';
 import { placesRoutes } from './places/places-routes';
@@ -26,5 +27,6 @@ export function allRoutes(deps: Deps): readonly AnyRoute[] {
     ...deskRoutes(deps),
     ...calendarsRoutes(deps),
     ...policyRoutes(deps),
+    ...liveRoutes(deps),
   ];
 }

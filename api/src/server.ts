@@ -9,6 +9,7 @@ import type { Config } from './config';
 import { migrate, openDatabase } from './database/connection';
 import { createDeps, type Deps } from './deps';
 import { startJobs } from './jobs/start-jobs';
+import { closeLive } from './live/live-hub';
 
 export interface RunningSite {
   readonly port: number;
@@ -32,6 +33,7 @@ export async function startSite(config: Config, webRoot?: string): Promise<Runni
     deps,
     stop: async () => {
       await stopJobs();
+      closeLive(config);
       await close(server);
       await db.destroy();
     },

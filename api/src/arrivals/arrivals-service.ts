@@ -21,6 +21,8 @@ import { findArrivalRow, saveMornings, saveReport, touchParcel, type ArrivalRow 
 export interface ArrivalsService {
   /** What the buyer sees, by the secret of the link. Throws 404. */
   byToken(token: string): Promise<Arrival>;
+  /** The parcel behind a link. Throws 404. */
+  parcelIdOf(token: string): Promise<number>;
   ofBuyer(personId: number): Promise<ArrivalList>;
   /** Keeps the buyer's word on the mornings named; what is left out stays as it was. Throws 400, 404, 409. */
   sayMornings(token: string, body: z.output<typeof morningsBody>): Promise<Arrival>;
@@ -38,6 +40,7 @@ const morningsAheadDays = 60;
 export function createArrivalsService(deps: Deps): ArrivalsService {
   return {
     byToken: (token) => showArrival(deps, token),
+    parcelIdOf: async (token) => (await found(deps, token)).parcel.id,
     async ofBuyer(personId) {
       const parcels = await deps.services.parcels.ofBuyer(personId);
       return parcels.map((parcel) => ({

@@ -1,5 +1,6 @@
 import type { HistoryEntry } from '@shared/contract';
 import type { Deps } from '../deps';
+import { wake } from '../jobs/wake';
 
 export interface HistoryRecord {
   /** Null for the system itself (a recheck, a job). */
@@ -30,7 +31,8 @@ interface HistoryRow {
 }
 
 /** The append-only record of who or what changed something. */
-export function createHistoryService({ db, clock }: Deps): HistoryService {
+export function createHistoryService(deps: Deps): HistoryService {
+  const { db, clock } = deps;
   return {
     async add(record) {
       await db('history').insert({
@@ -44,6 +46,7 @@ export function createHistoryService({ db, clock }: Deps): HistoryService {
         before: record.before === undefined ? null : JSON.stringify(record.before),
         after: record.after === undefined ? null : JSON.stringify(record.after),
       });
+      deps.afterCommit(() => wake(deps.config, 'live'));
     },
     async of(subjectKind, subjectId) {
       const rows = await db<HistoryRow>('history')

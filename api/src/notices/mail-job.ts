@@ -1,5 +1,5 @@
 import type { Deps } from '../deps';
-import { onMail } from './mail-wake';
+import { onWake } from '../jobs/wake';
 import { drainOutbox } from './outbox';
 
 /** The outbox is looked at this often, besides right after every commit that filled it. */
@@ -30,7 +30,7 @@ export function startMailJob(deps: Deps): () => Promise<void> {
   };
 
   const timer = setInterval(wake, everyMs);
-  const offMail = onMail(deps.config, wake);
+  const offMail = onWake(deps.config, 'mail', wake);
   wake();
   return async () => {
     stopped = true;

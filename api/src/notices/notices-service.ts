@@ -1,6 +1,6 @@
 import { notFound } from '@shared/errors';
 import type { Deps } from '../deps';
-import { mailWaits } from './mail-wake';
+import { wake } from '../jobs/wake';
 import { invitationsOf, type Invitation } from './invitation-queries';
 import { countMails, failedMails, requeueMail } from './outbox-queries';
 import { drainOutbox } from './outbox';
@@ -93,7 +93,7 @@ export function createNoticesService(deps: Deps): NoticesService {
     invitationsOf: (personId) => invitationsOf(db, personId),
     async resend(id) {
       if (!(await requeueMail(db, id, clock.nowIso()))) throw notFound('That failed mail');
-      deps.afterCommit(() => mailWaits(deps.config));
+      deps.afterCommit(() => wake(deps.config, 'mail'));
     },
   };
 }

@@ -3,7 +3,7 @@ import type { Deps } from '../deps';
 import { publicHost } from './addresses';
 import { backOffMinutes, maxAttempts } from './back-off';
 import type { Mailbox } from './calendar-text';
-import { mailWaits } from './mail-wake';
+import { wake } from '../jobs/wake';
 import { claimMails, insertMail, settleMail, type CalendarPart, type ClaimedMail } from './outbox-queries';
 import { createMailSender, type MailSender } from './smtp';
 import type { Letter } from './templates/letter';
@@ -42,7 +42,7 @@ export async function post(deps: Deps, mail: Mail): Promise<void> {
     clock.nowIso(),
     error,
   );
-  deps.afterCommit(() => mailWaits(config));
+  deps.afterCommit(() => wake(config, 'mail'));
 }
 
 /** A claim older than this belonged to a process that stopped. */

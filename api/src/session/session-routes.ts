@@ -13,6 +13,7 @@ import { isAppError } from '@shared/errors';
 import type { Deps } from '../deps';
 import { formToken } from '../http/form-token';
 import { route, type AnyRoute } from '../http/route';
+import { closeLiveSession } from '../live/live-hub';
 import { addressLimit } from './address-limit';
 import { authenticate, logIn } from './authenticator';
 import { sessionCookie } from './session-middleware';
@@ -56,7 +57,7 @@ function signInRoutes(deps: Deps): AnyRoute[] {
       summary: 'Sign out',
       allow: 'anyone',
       response: null,
-      handler: ({ req, res }) => logOut(req, res),
+      handler: ({ req, res }) => logOut(deps, req, res),
     }),
     route({
       method: 'get',
@@ -139,7 +140,8 @@ async function withRetryAfter<T>(res: Response, work: () => Promise<T>): Promise
   });
 }
 
-function logOut(req: Request, res: Response): Promise<void> {
+function logOut({ config }: Deps, req: Request, res: Response): Promise<void> {
+  closeLiveSession(config, req.sessionID);
   return new Promise((resolve, reject) => {
     req.session.destroy((error?: Error | null) => {
       res.clearCookie(sessionCookie);

@@ -11,3 +11,4 @@ export * from './arrivals';
 export * from './calendars';
 export * from './desk';
 export * from './policy';
+export * from './live';
